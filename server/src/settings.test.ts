@@ -1,0 +1,59 @@
+import { mkdtempSync, rmSync, statSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import path from 'node:path';
+import { afterEach, beforeEach, describe, expect, it } from 'vitest';
+import { prepareDataDir, readSettings } from './settings.ts';
+
+describe('readSettings', () => {
+  it('takes port 4380, data/ and studio/dist without an environment', () => {
+    const settings = readSettings({});
+    expect(settings.port).toBe(4380);
+    expect(settings.dataDir).toMatch(/[\\/]data$/);
+    expect(settings.studioDir).toMatch(/studio[\\/]dist$/);
+    expect(settings.logLevel).toBe('info');
+  });
+
+  it('reads every setting', () => {
+    const settings = readSettings({
+      PORT: '8080',
+      DATA_DIR: '/var/volt',
+      STUDIO_DIR: '/srv/studio',
+      LOG_LEVEL: 'warn',
+    });
+    expect(settings).toEqual({ port: 8080, dataDir: '/var/volt', studioDir: '/srv/studio', logLevel: 'warn' });
+  });
+
+  it.each(['http', '-1', '65536', '80.5', '1e3', ' 80'])('refuses PORT=%s and repeats it', (text) => {
+    expect(() => readSettings({ PORT: text })).toThrow(`but it is "${text}"`);
+  });
+
+  it('accepts the ends of the range', () => {
+    expect(readSettings({ PORT: '0' }).port).toBe(0);
+    expect(readSettings({ PORT: '65535' }).port).toBe(65_535);
+  });
+
+  it('refuses an unknown log level', () => {
+    expect(() => readSettings({ LOG_LEVEL: 'loud' })).toThrow('LOG_LEVEL must be one of');
+  });
+});
+
+describe('prepareDataDir', () => {
+  let dir: string;
+  beforeEach(() => {
+    dir = mkdtempSync(path.join(tmpdir(), 'voltiplano-settings-'));
+  });
+  afterEach(() => {
+    rmSync(dir, { recursive: true });
+  });
+
+  it('makes the directory and its parents', () => {
+    prepareDataDir(path.join(dir, 'a/b'));
+    expect(statSync(path.join(dir, 'a/b')).isDirectory()).toBe(true);
+  });
+
+  it('refuses a path that is a file and says which setting to change', () => {
+    const file = path.join(dir, 'file');
+    writeFileSync(file, '');
+    expect(() => prepareDataDir(file)).toThrow(/Cannot keep data in .*file.*Set DATA_DIR/);
+  });
+});
