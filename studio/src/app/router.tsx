@@ -1,0 +1,32 @@
+import { createBrowserRouter } from 'react-router-dom';
+import { ErrorPage } from './error-page.tsx';
+import { Layout } from './layout.tsx';
+import { NotFoundPage } from './not-found-page.tsx';
+
+/** Every page is a bundle of its own: the landing page never waits for the desk, nor either for Plotly. */
+export const router = createBrowserRouter([
+  {
+    element: <Layout />,
+    errorElement: <ErrorPage />,
+    // The sheet stays empty for the moment before the first page's bundle is here.
+    HydrateFallback: () => null,
+    children: [
+      {
+        errorElement: <ErrorPage />,
+        children: [
+          {
+            path: '/',
+            lazy: async () => ({ Component: (await import('../features/landing/landing-page.tsx')).LandingPage }),
+          },
+          {
+            path: '/try',
+            lazy: async () => ({
+              Component: (await import('../features/session-desk/session-desk-page.tsx')).SessionDeskPage,
+            }),
+          },
+          { path: '*', element: <NotFoundPage /> },
+        ],
+      },
+    ],
+  },
+]);
