@@ -33,6 +33,8 @@ export default defineConfig({
           name: 'studio',
           root: 'studio',
           environment: 'jsdom',
+          // Testing Library unmounts after each test only where it finds a global afterEach.
+          globals: true,
           include: ['src/**/*.test.{ts,tsx}'],
           setupFiles,
           testTimeout: 15_000,

@@ -1,0 +1,55 @@
+import { existsSync } from 'node:fs';
+import { createServer } from 'node:net';
+import type { AddressInfo } from 'node:net';
+import path from 'node:path';
+import { defineConfig } from '@playwright/test';
+
+const ROOT = path.resolve(import.meta.dirname, '../..');
+const SYSTEM_CHROMIUM = '/usr/bin/chromium';
+
+// Each worker process reads this file again: the port is chosen once and handed down by the environment.
+process.env.E2E_PORT ??= String(await freePort());
+const address = `http://localhost:${process.env.E2E_PORT}`;
+
+/** Whole journeys through the built studio, served by the real server. Build first: `npm run build`. */
+export default defineConfig({
+  testDir: '.',
+  outputDir: path.join(ROOT, 'test-results'),
+  workers: 1,
+  forbidOnly: Boolean(process.env.CI),
+  timeout: 60_000,
+  reporter: 'list',
+  use: {
+    baseURL: address,
+    locale: 'en-GB',
+    trace: 'retain-on-failure',
+    launchOptions: {
+      executablePath: process.env.CHROMIUM_PATH ?? (existsSync(SYSTEM_CHROMIUM) ? SYSTEM_CHROMIUM : undefined),
+      args: [
+        '--no-sandbox',
+        '--disable-gpu',
+        '--disable-quic',
+        '--no-first-run',
+        '--disable-background-networking',
+        '--disable-component-update',
+        '--disable-sync',
+      ],
+    },
+  },
+  webServer: {
+    command: 'node --import tsx server/src/main.ts',
+    cwd: ROOT,
+    env: { PORT: process.env.E2E_PORT, DATA_DIR: path.join(ROOT, 'test-results/data'), LOG_LEVEL: 'warn' },
+    url: `${address}/api/health`,
+    reuseExistingServer: false,
+    gracefulShutdown: { signal: 'SIGTERM', timeout: 5000 },
+  },
+});
+
+async function freePort(): Promise<number> {
+  const probe = createServer();
+  await new Promise<void>((resolve) => probe.listen(0, resolve));
+  const { port } = probe.address() as AddressInfo;
+  await new Promise((resolve) => probe.close(resolve));
+  return port;
+}
