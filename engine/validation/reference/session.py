@@ -19,7 +19,8 @@ from scipy.integrate import DOP853, LSODA, RK45, Radau, fixed_quad
 from scipy.optimize import brentq, minimize_scalar
 
 sys.dont_write_bytecode = True  # leaves nothing beside the sources
-from model import CODES, INTEGRALS, T25, Refused, SessionModel  # noqa: E402
+from inputs import Refused  # noqa: E402
+from model import CODES, INTEGRALS, T25, SessionModel  # noqa: E402
 
 METHODS = {"Radau": Radau, "DOP853": DOP853, "LSODA": LSODA, "RK45": RK45}
 LOOKS = (0.25, 0.5, 0.75, 1.0)  # where a step is looked at, as shares of it
@@ -133,16 +134,21 @@ class Run:
 
     def extreme(self, samples, key, sign=1.0, scale=1.0):
         """Largest value of sign*scale*key, and the first row within 1e-6 of it, in the unit reported."""
+        if not samples:
+            row = self.model.row(0.0, self.y_end, self.last_mode)
+            return scale * row[key], row
+
         def value(piece, t):
             return sign * scale * self.piece_row(piece, t)[key]
-        values = [sign * scale * row[key] for _, row in samples]
-        top = int(np.argmax(values))
-        best = values[top]
-        for near in range(max(0, top - 3), min(len(samples), top + 4)):
-            piece = samples[near][0]
+        top = max(range(len(samples)), key=lambda k: sign * samples[k][1][key])
+        inside = []
+        for piece in {id(p): p for p, _ in samples[max(0, top - 3):top + 4]}.values():
             found = minimize_scalar(lambda t: -value(piece, t), bounds=(piece.t0, piece.t1), method="bounded",
                                     options={"xatol": 1e-9})
-            best = max(best, -found.fun)
+            inside.append((piece, self.piece_row(piece, float(found.x))))
+        samples = sorted(samples + inside, key=lambda s: s[1]["tS"])
+        values = [sign * scale * row[key] for _, row in samples]
+        best = max(values)
         first = next(k for k, v in enumerate(values) if v >= best - 1e-6)
         piece, row = samples[first]
         if first and samples[first - 1][0] is piece:
@@ -175,18 +181,20 @@ class Run:
         out = dict(endReason=self.reason, endMin=self.end / 60, endSoc=float(self.y_end[0]),
                    minutesToSoc={str(x): None if reach[x] is None else reach[x] / 60 for x in range(10, 101, 10)},
                    minutes0To50=span(0, 50), minutes10To80=span(10, 80), minutes0To100=span(0, 100))
-        samples = list(self.samples()) or [(None, self.model.row(0.0, self.y_end, self.last_mode))]
-        look = self.extreme if self.pieces else lambda got, key, sign=1.0, scale=1.0: (scale * got[0][1][key], got[0][1])
+        samples = list(self.samples())
+
+        def look(*asked, **how):
+            return self.extreme(samples, *asked, **how)
         for name, key in (("peakStationPower", "stationPowerKw"), ("peakBatteryPower", "batteryPowerKw")):
-            best, row = look(samples, key)
+            best, row = look(key)
             out.update({name + "Kw": best, name + "Min": row["tS"] / 60, name + "Soc": row["soc"]})
         out.update(meanStationPower10To80Kw=mean("station"), meanBatteryPower10To80Kw=mean("battery"))
         kwh = {str(m): self.integral("battery", min(m * 60.0, self.end)) / 3.6e6 for m in (10, 15, 20, 30)}
         out.update(batteryKwhAfterMin=kwh, kmAfterMin={m: e * 1e3 / s.whPerKm for m, e in kwh.items()})
-        best, row = look(samples, "hottestCoreC")
+        best, row = look("hottestCoreC")
         out.update(hottestCoreC=best, hottestCoreMin=row["tS"] / 60, lowestAnodeMv=None, lowestAnodeMin=None)
         if self.model.anode_ocp:
-            best, row = look(samples, "lowestAnodeV", sign=-1.0, scale=1e3)
+            best, row = look("lowestAnodeV", sign=-1.0, scale=1e3)
             out.update(lowestAnodeMv=best, lowestAnodeMin=row["tS"] / 60)
         limit = dict.fromkeys(CODES, 0.0)
         for p in self.pieces:
@@ -231,6 +239,19 @@ def result_of(study, every=10.0, rtol=1e-10, method="Radau"):
                 series=run.series(every))
 
 
+def printed(value, indent=""):
+    """JSON text with twelve significant digits; every list and every event on one line."""
+    if isinstance(value, dict) and "event" not in value:
+        inner = indent + " "
+        rows = (f"{inner}{json.dumps(k)}: {printed(v, inner)}" for k, v in value.items())
+        return "{\n" + ",\n".join(rows) + "\n" + indent + "}"
+    if isinstance(value, dict):
+        return "{ " + ", ".join(f"{json.dumps(k)}: {printed(v)}" for k, v in value.items()) + " }"
+    if isinstance(value, list):
+        return "[" + ", ".join(printed(v) for v in value) + "]"
+    return json.dumps(float(f"{value:.12g}") if isinstance(value, float) else value, ensure_ascii=False)
+
+
 def main():
     parser = argparse.ArgumentParser(description=__doc__.strip().splitlines()[0])
     parser.add_argument("study")
@@ -243,9 +264,9 @@ def main():
     try:
         result = result_of(study, asked.every, asked.rtol, asked.method)
     except Refused as refusal:
-        sys.exit(print(refusal, file=sys.stderr) or 2)
-    json.dump(result, sys.stdout, indent=1)
-    print()
+        print(refusal, file=sys.stderr)
+        sys.exit(2)
+    print(printed(result))
 
 
 if __name__ == "__main__":
