@@ -11,7 +11,9 @@ const SYSTEM_CHROMIUM = '/usr/bin/chromium';
  * @throws {Error} if none is found and none can be installed; the message says how to mend it
  */
 export function findChromium() {
-  const installed = installedChromium();
+  const named = process.env.CHROMIUM_PATH;
+  if (named && !existsSync(named)) throw new Error(`CHROMIUM_PATH names ${named}, which is not there.`);
+  const installed = named || installedChromium();
   if (installed) return installed;
   install();
   const after = installedChromium();
@@ -23,8 +25,7 @@ export function findChromium() {
 }
 
 function installedChromium() {
-  const candidates = [process.env.CHROMIUM_PATH, SYSTEM_CHROMIUM, chromium.executablePath()];
-  return candidates.find((path) => path && existsSync(path));
+  return [SYSTEM_CHROMIUM, chromium.executablePath()].find((path) => existsSync(path));
 }
 
 function install() {

@@ -1,14 +1,15 @@
-import { existsSync } from 'node:fs';
-import { createServer } from 'node:net';
-import type { AddressInfo } from 'node:net';
+import { existsSync, mkdtempSync } from 'node:fs';
+import { createServer, type AddressInfo } from 'node:net';
+import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { defineConfig } from '@playwright/test';
 
 const ROOT = path.resolve(import.meta.dirname, '../..');
 const SYSTEM_CHROMIUM = '/usr/bin/chromium';
 
-// Each worker process reads this file again: the port is chosen once and handed down by the environment.
+// Each worker process reads this file again: what is chosen once is handed down by the environment.
 process.env.E2E_PORT ??= String(await freePort());
+process.env.E2E_DATA_DIR ??= mkdtempSync(path.join(tmpdir(), 'voltiplano-e2e-'));
 const address = `http://localhost:${process.env.E2E_PORT}`;
 
 /** Whole journeys through the built studio, served by the real server. Build first: `npm run build`. */
@@ -39,7 +40,7 @@ export default defineConfig({
   webServer: {
     command: 'node --import tsx server/src/main.ts',
     cwd: ROOT,
-    env: { PORT: process.env.E2E_PORT, DATA_DIR: path.join(ROOT, 'test-results/data'), LOG_LEVEL: 'warn' },
+    env: { PORT: process.env.E2E_PORT, DATA_DIR: process.env.E2E_DATA_DIR, LOG_LEVEL: 'warn' },
     url: `${address}/api/health`,
     reuseExistingServer: false,
     gracefulShutdown: { signal: 'SIGTERM', timeout: 5000 },
