@@ -1,0 +1,26 @@
+export { parseSessionStudy, parseStudy, parseStudyText, pathText } from './study/parse-study.ts';
+export { StudyError, type StudyErrorCode, type StudyIssue } from './study/study-error.ts';
+export { quantities, type Quantity, type QuantityPath } from './study/quantities.ts';
+export { partSchemas, sessionStudySchema, studySchema, tripStudySchema } from './study/schema.ts';
+export type {
+  Boost,
+  Cell,
+  Inlet,
+  Leg,
+  Pack,
+  Session,
+  SessionStudy,
+  SessionStudyInput,
+  Station,
+  Strategy,
+  Study,
+  Taper,
+  Thermal,
+  TripStudy,
+  TripStudyInput,
+  Vehicle,
+} from './study/schema.ts';
+export { electrodePairs, potentialsOf, type ElectrodePair } from './cell/electrodes.ts';
+export { limitCodes, limitSide, type LimitCode } from './session/limits.ts';
+export type * from './session/result.ts';
+export { simulateSession, type RunStatistics, type SessionOptions, type SessionRun } from './session/simulate-session.ts';

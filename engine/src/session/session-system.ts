@@ -1,0 +1,78 @@
+import { PackSystem } from '../pack/pack-system.ts';
+import { TaperTable } from '../strategy/taper-table.ts';
+import type { SessionStudy } from '../study/schema.ts';
+import { studyError } from '../study/study-error.ts';
+import { ChargeCurrent } from './charge-current.ts';
+import { decideBoost, inletOf, stateAtPlugIn } from './plug-in.ts';
+
+/** Raised inside a trial step that ran out of the numbers' range; the run shortens its steps and tries again. */
+export class NotFinite extends Error {}
+
+/** One session's physics, ready to be integrated: pack and heat, the current, and what changes at jumps. */
+export class SessionSystem {
+  readonly pack: PackSystem;
+  readonly taper: TaperTable;
+  readonly charge: ChargeCurrent;
+  readonly start: number[];
+  readonly boosted: boolean;
+  /** Limit that the derivative follows alone (index in `limitCodes`), or −1 for the smallest of all. */
+  followed = -1;
+
+  /** @throws {StudyError} `REFUSED` where the session cannot start */
+  constructor(study: SessionStudy) {
+    const inlet = inletOf(study);
+    this.pack = new PackSystem({ ...study, inlet });
+    this.pack.ambientC = study.session.ambientC;
+    this.pack.hotelW = study.session.hotelW;
+    this.taper = new TaperTable(study.strategy.taper);
+    this.start = stateAtPlugIn(this.pack, study.session);
+    this.pack.observe(this.start);
+    this.boosted = decideBoost(this.pack.restV, study.station, study.boost);
+    this.charge = new ChargeCurrent({ ...study, inlet, boost: study.boost }, this.pack, this.taper, this.boosted);
+  }
+
+  /** Reads a state at t seconds after plug-in and decides the current there by all limits. */
+  at(t: number, y: ArrayLike<number>): void {
+    this.pack.observe(y);
+    this.charge.decide(t, y[this.pack.layout.inlet]!);
+  }
+
+  /** dy/dt for the integrator. */
+  readonly derivative = (t: number, y: number[], dy: number[]): void => {
+    const { pack, charge } = this;
+    const { inlet, integrals } = pack.layout;
+    pack.observe(y);
+    if (this.followed < 0) charge.decide(t, y[inlet]!);
+    else charge.follow(this.followed, t, y[inlet]!);
+    const { current, stationCurrent } = charge;
+    pack.rates(y, dy, current, stationCurrent);
+    dy[integrals] = charge.stationVoltage * stationCurrent;
+    dy[integrals + 2] = charge.boostLossW;
+    // Every state feeds one of these sums, so anything not finite shows here; odex would take NaN for converged.
+    const sum = dy[integrals + 9]! + dy[integrals + 12]! + pack.coolant.outC + y[inlet]! + stationCurrent;
+    if (!(sum - sum === 0)) throw new NotFinite();
+  };
+
+  /** Shortest time constant of the states [s] and what has it: the integrator must stay within a few of them. */
+  fastest(): { seconds: number; name: string } {
+    const { pack } = this;
+    const { coolant } = pack;
+    const candidates: { seconds: number; name: string }[] = [];
+    pack.tau.forEach((seconds, k) => candidates.push({ seconds, name: `RC pair ${k + 1} (cell.rcPairs[${k}].tauS)` }));
+    const outward = coolant.wallConductance + pack.surfaceToAir;
+    const name = 'the surface node’s heat capacity against its conductances (thermal)';
+    if (pack.layout.twoNode) {
+      candidates.push({ seconds: pack.surfaceJPerK / (pack.coreToSurface + outward), name });
+      candidates.push({ seconds: pack.coreJPerK / pack.coreToSurface, name: 'the core node’s heat capacity (thermal)' });
+    } else candidates.push({ seconds: pack.coreJPerK / (outward || 1e-9), name });
+    if (coolant.flowWPerK > 0)
+      candidates.push({ seconds: coolant.loopJPerK / coolant.flowWPerK, name: 'the coolant loop’s volume against its flow (thermal.coolant)' });
+    return candidates.reduce((a, b) => (b.seconds < a.seconds ? b : a), { seconds: 1e9, name: 'none' });
+  }
+}
+
+/** The error for a run that leaves the numbers' range however short its steps. */
+export function inconsistent(t: number): Error {
+  const message = `Stopped at ${(t / 60).toFixed(1)} min: the state left the range of numbers. A heat capacity, resistance or table of this study is far out of proportion.`;
+  return studyError('INCONSISTENT', '', 'finite', message);
+}
