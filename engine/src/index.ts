@@ -1,6 +1,7 @@
 export { parseSessionStudy, parseStudy, parseStudyText, pathText } from './study/parse-study.ts';
 export { StudyError, type StudyErrorCode, type StudyIssue } from './study/study-error.ts';
-export { quantities, type Quantity, type QuantityPath } from './study/quantities.ts';
+export { quantities, type QuantityPath } from './study/quantities.ts';
+export type { Quantity } from './study/quantity.ts';
 export { partSchemas, sessionStudySchema, studySchema, tripStudySchema } from './study/schema.ts';
 export type {
   Boost,
@@ -23,4 +24,10 @@ export type {
 export { electrodePairs, potentialsOf, type ElectrodePair } from './cell/electrodes.ts';
 export { limitCodes, limitSide, type LimitCode } from './session/limits.ts';
 export type * from './session/result.ts';
-export { simulateSession, type RunStatistics, type SessionOptions, type SessionRun } from './session/simulate-session.ts';
+export {
+  simulateSession,
+  type RunStatistics,
+  type SessionOptions,
+  type SessionRun,
+} from './session/simulate-session.ts';
+export { thermalAnalysis, type SteadyState, type ThermalAnalysis } from './thermal/thermal-analysis.ts';

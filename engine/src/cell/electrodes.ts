@@ -5,7 +5,7 @@ export const electrodePairs = ['nmc811-graphite', 'lfp-graphite'] as const;
 export type ElectrodePair = (typeof electrodePairs)[number];
 
 /** Potential of a cell and of its negative electrode [V], over z (fraction of full capacity). */
-export type Potentials = { ocv(z: number): number; anode(z: number): number };
+export type Potentials = { ocv: (z: number) => number; anode: (z: number) => number };
 
 // Chen et al. 2020, J. Electrochem. Soc. 167 080534 (coefficients from memory). x: lithiation of the electrode.
 const nmc811Cathode = (x: number) =>

@@ -5,7 +5,14 @@
  * @param fa, fb    values at a and b, of opposite sign (fb may be 0)
  * @param tolerance widest last bracket, in units of x
  */
-export function findRoot(f: (x: number) => number, a: number, fa: number, b: number, fb: number, tolerance: number): number {
+export function findRoot(
+  f: (x: number) => number,
+  a: number,
+  fa: number,
+  b: number,
+  fb: number,
+  tolerance: number,
+): number {
   for (let round = 0; round < 80 && Math.abs(b - a) > tolerance && fb !== 0; round++) {
     const slow = round > 20;
     let x = slow ? (a + b) / 2 : b - (fb * (b - a)) / (fb - fa);
@@ -32,7 +39,12 @@ export function findRoot(f: (x: number) => number, a: number, fa: number, b: num
 /**
  * The highest point of a function between `a` and `c`, by golden section down to `tolerance`; `b` lies between and is higher.
  */
-export function findPeak(f: (x: number) => number, a: number, c: number, tolerance: number): { x: number; value: number } {
+export function findPeak(
+  f: (x: number) => number,
+  a: number,
+  c: number,
+  tolerance: number,
+): { x: number; value: number } {
   const golden = (Math.sqrt(5) - 1) / 2;
   let left = c - golden * (c - a);
   let right = a + golden * (c - a);

@@ -44,5 +44,16 @@ export function layoutOf(segments: number, pairs: number, twoNode: boolean): Lay
   const rc = surface + segments;
   const loop = rc + pairs * segments;
   const integrals = loop + 2;
-  return { segments, pairs, twoNode, core, surface, rc, loop, inlet: loop + 1, integrals, size: integrals + integralNames.length };
+  return {
+    segments,
+    pairs,
+    twoNode,
+    core,
+    surface,
+    rc,
+    loop,
+    inlet: loop + 1,
+    integrals,
+    size: integrals + integralNames.length,
+  };
 }

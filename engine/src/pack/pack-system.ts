@@ -111,7 +111,7 @@ export class PackSystem {
   /** Reads a state vector; pure but for the fields it fills. */
   observe(y: ArrayLike<number>): void {
     const { core, surface, rc, pairs, segments: M } = this.layout;
-    const z = y[0]!;
+    const z = y[0];
     const n = this.cellsPerSegment;
     const ocv = this.curves.ocv.value(z);
     const entropic = this.curves.entropic.value(z);
@@ -126,11 +126,11 @@ export class PackSystem {
     let hottest = -Infinity;
     let coldest = Infinity;
     for (let j = 0; j < M; j++) {
-      const kelvin = y[core + j]! + KELVIN;
+      const kelvin = y[core + j] + KELVIN;
       const factor = shape * exp(this.activation * (1 / kelvin - 1 / T25));
       const r0 = this.ohmic25 * factor;
       let v = 0;
-      for (let k = 0; k < pairs; k++) v += y[rc + k * M + j]!;
+      for (let k = 0; k < pairs; k++) v += y[rc + k * M + j];
       const rest = n * (ocv + (kelvin - T25) * entropic) + v;
       this.factor[j] = factor;
       this.ohmic[j] = r0;
@@ -142,7 +142,7 @@ export class PackSystem {
       if (ceilingAllows < ceilingCurrent) ceilingCurrent = ceilingAllows;
       const anodeAllows = (anodeRoom - v) / r0;
       if (anodeAllows < anodeCurrent) anodeCurrent = anodeAllows;
-      const s = y[surface + j]!;
+      const s = y[surface + j];
       if (s > hottest) hottest = s;
       if (s < coldest) coldest = s;
     }
@@ -156,7 +156,7 @@ export class PackSystem {
     this.anodeRest = phi;
     this.entropicVPerK = n * entropic;
     const coolant = this.coolant;
-    coolant.control(hottest, coldest, y[this.layout.loop]!, this.ambientC, this.speed);
+    coolant.control(hottest, coldest, y[this.layout.loop], this.ambientC, this.speed);
     this.auxiliaryW = this.hotelW + coolant.electricalW;
   }
 
@@ -178,18 +178,18 @@ export class PackSystem {
     let held = 0;
     let toAir = 0;
     for (let j = 0; j < M; j++) {
-      const T = y[core + j]!;
-      const S = y[surface + j]!;
-      const factor = this.factor[j]!;
+      const T = y[core + j];
+      const S = y[surface + j];
+      const factor = this.factor[j];
       let pol = 0;
       for (let k = 0; k < pairs; k++) {
         const at = rc + k * M + j;
-        const v = y[at]!;
-        const r = this.rc25[k]! * factor;
+        const v = y[at];
+        const r = this.rc25[k] * factor;
         pol += (v * v) / r;
-        dy[at] = (I * r - v) / this.tau[k]!;
+        dy[at] = (I * r - v) / this.tau[k];
       }
-      const joule = I * I * this.ohmic[j]!;
+      const joule = I * I * this.ohmic[j];
       const entropic = I * (T + KELVIN) * this.entropicVPerK;
       const wall = coolant.wallConductance * (S - theta);
       theta += coolant.effectiveness * (S - theta);
@@ -204,13 +204,13 @@ export class PackSystem {
       ohmic += joule;
       polarisation += pol;
       reversible += entropic;
-      held += I * this.overvoltage[j]! - pol;
+      held += I * this.overvoltage[j] - pol;
       toAir += loss;
     }
     dy[0] = I / (3600 * this.capacityAh);
-    dy[loop] = coolant.reservoirRate(theta, y[loop]!);
+    dy[loop] = coolant.reservoirRate(theta, y[loop]);
     const inletHeat = inletCurrent * inletCurrent * this.inletOhm;
-    dy[inlet] = (inletHeat - this.inletToAir * (y[inlet]! - ambient)) / this.inletJPerK;
+    dy[inlet] = (inletHeat - this.inletToAir * (y[inlet] - ambient)) / this.inletJPerK;
     coolant.outC = theta;
     dy[integrals + 1] = inletHeat;
     dy[integrals + 3] = this.auxiliaryW;
@@ -229,14 +229,14 @@ export class PackSystem {
   /** Highest cell voltage at a current [V]. */
   highestCellV(current: number): number {
     let highest = -Infinity;
-    for (let j = 0; j < this.layout.segments; j++) highest = Math.max(highest, this.rest[j]! + current * this.ohmic[j]!);
+    for (let j = 0; j < this.layout.segments; j++) highest = Math.max(highest, this.rest[j] + current * this.ohmic[j]);
     return highest / this.cellsPerSegment;
   }
 
   /** Lowest cell voltage at a current [V]. */
   lowestCellV(current: number): number {
     let lowest = Infinity;
-    for (let j = 0; j < this.layout.segments; j++) lowest = Math.min(lowest, this.rest[j]! + current * this.ohmic[j]!);
+    for (let j = 0; j < this.layout.segments; j++) lowest = Math.min(lowest, this.rest[j] + current * this.ohmic[j]);
     return lowest / this.cellsPerSegment;
   }
 
@@ -244,7 +244,7 @@ export class PackSystem {
   lowestAnodeV(current: number): number {
     if (this.curves.anode === null) return Number.NaN;
     let most = -Infinity;
-    for (let j = 0; j < this.layout.segments; j++) most = Math.max(most, current * this.ohmic[j]! + this.overvoltage[j]!);
+    for (let j = 0; j < this.layout.segments; j++) most = Math.max(most, current * this.ohmic[j] + this.overvoltage[j]);
     return this.anodeRest - (this.share * most) / this.cellsPerSegment;
   }
 
@@ -252,7 +252,7 @@ export class PackSystem {
   hottestCore(y: ArrayLike<number>): number {
     const { core, segments } = this.layout;
     let hottest = -Infinity;
-    for (let j = 0; j < segments; j++) if (y[core + j]! > hottest) hottest = y[core + j]!;
+    for (let j = 0; j < segments; j++) if (y[core + j] > hottest) hottest = y[core + j]!;
     return hottest;
   }
 
@@ -260,7 +260,7 @@ export class PackSystem {
   coolantOut(y: ArrayLike<number>): number {
     const { surface, segments } = this.layout;
     let theta = this.coolant.inC;
-    for (let j = 0; j < segments; j++) theta += this.coolant.effectiveness * (y[surface + j]! - theta);
+    for (let j = 0; j < segments; j++) theta += this.coolant.effectiveness * (y[surface + j] - theta);
     return theta;
   }
 

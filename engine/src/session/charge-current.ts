@@ -1,12 +1,21 @@
 import type { PackSystem } from '../pack/pack-system.ts';
-import { boostInputCurrent, currentForPower, packCurrentFor, packCurrentForStationPower, packCurrentForStationVoltage } from '../station/link.ts';
+import {
+  boostInputCurrent,
+  currentForPower,
+  packCurrentFor,
+  packCurrentForStationPower,
+  packCurrentForStationVoltage,
+} from '../station/link.ts';
 import type { TaperTable } from '../strategy/taper-table.ts';
 import type { Boost, Inlet, Pack, Station, Strategy } from '../study/schema.ts';
 import { PiecewiseCubic } from '../table/piecewise-cubic.ts';
 import { limitCodes } from './limits.ts';
 
 /** Index of each limit in `limitCodes`, for the hot path. */
-export const LIMIT = Object.fromEntries(limitCodes.map((code, i) => [code, i])) as Record<(typeof limitCodes)[number], number>;
+export const LIMIT = Object.fromEntries(limitCodes.map((code, i) => [code, i])) as Record<
+  (typeof limitCodes)[number],
+  number
+>;
 
 const STATION_CURRENT = LIMIT['station-current'];
 const STATION_POWER = LIMIT['station-power'];
@@ -168,7 +177,13 @@ export class ChargeCurrent {
       case STATION_VOLTAGE:
         return this.boosted
           ? Infinity
-          : packCurrentForStationVoltage(system.restV, system.ohm, system.auxiliaryW, system.inletOhm, this.stationVoltageMaxV);
+          : packCurrentForStationVoltage(
+              system.restV,
+              system.ohm,
+              system.auxiliaryW,
+              system.inletOhm,
+              this.stationVoltageMaxV,
+            );
       case STATION_RAMP:
         return this.packSide(this.rampAPerS * seconds);
       case INLET:

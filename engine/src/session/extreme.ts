@@ -55,7 +55,8 @@ export class Extreme {
     const peak = found.value > v1 ? found : { x: t1, value: v1 };
     if (peak.value > this.value + WITHIN) {
       const low = peak.value - WITHIN;
-      this.tS = from < peak.x && v2 < low ? findRoot((t) => this.at(t) - low, from, v2 - low, peak.x, WITHIN, 1e-6) : from;
+      this.tS =
+        from < peak.x && v2 < low ? findRoot((t) => this.at(t) - low, from, v2 - low, peak.x, WITHIN, 1e-6) : from;
       this.soc = this.socAt(this.tS);
     }
     this.value = Math.max(this.value, peak.value);

@@ -5,18 +5,38 @@ import type { EnergyLedger, ThermalLedger } from './result.ts';
 const J_PER_KWH = 3.6e6;
 
 /** Growth of each ledger integral between two states [J]. */
-export function integralsBetween(pack: PackSystem, from: readonly number[], to: readonly number[]): Record<IntegralName, number> {
+export function integralsBetween(
+  pack: PackSystem,
+  from: readonly number[],
+  to: readonly number[],
+): Record<IntegralName, number> {
   const first = pack.layout.integrals;
-  return Object.fromEntries(integralNames.map((name, i) => [name, to[first + i]! - from[first + i]!])) as Record<IntegralName, number>;
+  return Object.fromEntries(integralNames.map((name, i) => [name, to[first + i] - from[first + i]])) as Record<
+    IntegralName,
+    number
+  >;
 }
 
 /** Energy from the grid to the cells between two states of a session (engine/MODEL.md, section 8). */
-export function energyLedger(pack: PackSystem, from: readonly number[], to: readonly number[], rectifierEfficiency: number): EnergyLedger {
+export function energyLedger(
+  pack: PackSystem,
+  from: readonly number[],
+  to: readonly number[],
+  rectifierEfficiency: number,
+): EnergyLedger {
   const joule = integralsBetween(pack, from, to);
   const kwh = (j: number) => j / J_PER_KWH;
-  const stored = pack.storedJ(from[0]!, to[0]!);
+  const stored = pack.storedJ(from[0], to[0]);
   const explained =
-    joule.inlet + joule.boostLoss + joule.auxiliaries + joule.busbar + joule.ohmic + joule.polarisation + joule.reversible + stored + joule.rcPairs;
+    joule.inlet +
+    joule.boostLoss +
+    joule.auxiliaries +
+    joule.busbar +
+    joule.ohmic +
+    joule.polarisation +
+    joule.reversible +
+    stored +
+    joule.rcPairs;
   const grid = joule.station / rectifierEfficiency;
   return {
     gridKwh: kwh(grid),
@@ -41,13 +61,13 @@ export function thermalLedger(pack: PackSystem, from: readonly number[], to: rea
   const { core, surface, segments, twoNode, loop } = pack.layout;
   const gained = (first: number) => {
     let kelvin = 0;
-    for (let j = 0; j < segments; j++) kelvin += to[first + j]! - from[first + j]!;
+    for (let j = 0; j < segments; j++) kelvin += to[first + j] - from[first + j];
     return kelvin;
   };
   const cells = joule.ohmic + joule.polarisation + joule.reversible;
   const cores = pack.coreJPerK * gained(core);
   const surfaces = twoNode ? pack.surfaceJPerK * gained(surface) : 0;
-  const inLoop = pack.coolant.loopJPerK * (to[loop]! - from[loop]!);
+  const inLoop = pack.coolant.loopJPerK * (to[loop] - from[loop]);
   const explained = cores + surfaces + inLoop + joule.chiller + joule.radiator + joule.ambient - joule.heater;
   return {
     cellsKj: cells / 1000,

@@ -34,9 +34,21 @@ export function stateAtPlugIn(system: PackSystem, session: SessionStudy['session
 export function decideBoost(restV: number, station: Station, boost: Boost | undefined): boolean {
   const rest = `the pack rests at ${restV.toFixed(0)} V`;
   if (restV < station.voltageMinV)
-    throw studyError('REFUSED', 'station.voltageMinV', 'pack-below-station', `Cannot start: ${rest}, below this station’s lowest ${station.voltageMinV} V.`, station.voltageMinV);
+    throw studyError(
+      'REFUSED',
+      'station.voltageMinV',
+      'pack-below-station',
+      `Cannot start: ${rest}, below this station’s lowest ${station.voltageMinV} V.`,
+      station.voltageMinV,
+    );
   if (restV <= station.voltageMaxV) return false;
   if (boost) return true;
   const mend = 'Add a boost converter or choose another station.';
-  throw studyError('REFUSED', 'station.voltageMaxV', 'pack-above-station', `Cannot start: ${rest}, above this station’s ${station.voltageMaxV} V. ${mend}`, station.voltageMaxV);
+  throw studyError(
+    'REFUSED',
+    'station.voltageMaxV',
+    'pack-above-station',
+    `Cannot start: ${rest}, above this station’s ${station.voltageMaxV} V. ${mend}`,
+    station.voltageMaxV,
+  );
 }

@@ -62,12 +62,12 @@ export class SeriesRecorder {
     series.coldestSurfaceC.push(system.coldestSurface);
     series.coolantInC.push(coolant.inC);
     series.coolantOutC.push(system.coolantOut(y));
-    series.loopC.push(y[layout.loop]!);
-    series.inletC.push(y[layout.inlet]!);
+    series.loopC.push(y[layout.loop]);
+    series.inletC.push(y[layout.inlet]);
     series.chillerW.push(coolant.chillerW);
     series.radiatorW.push(coolant.radiatorW);
     series.heaterW.push(coolant.heaterW);
     series.auxiliaryW.push(system.auxiliaryW);
-    series.limit.push(limitCodes[code]!);
+    series.limit.push(limitCodes[code]);
   }
 }

@@ -4,7 +4,7 @@ import type { Session } from '../study/schema.ts';
 import { Extreme } from './extreme.ts';
 import { limitCodes, type LimitCode } from './limits.ts';
 import type { EndReason, MinuteMark, SessionMetrics, SocMark } from './result.ts';
-import type { SessionSystem } from './session-system.ts';
+import type { SessionSolution } from './session-solution.ts';
 
 const SOC_MARKS = ['10', '20', '30', '40', '50', '60', '70', '80', '90', '100'] as const;
 const MINUTE_MARKS = ['10', '15', '20', '30'] as const;
@@ -20,21 +20,14 @@ export class SessionMarks {
   private readonly batteryJAt = new Map<MinuteMark, number>();
   private readonly heldS = new Float64Array(limitCodes.length);
   private readonly tracked: Tracked[];
-  /** Whether the system was made to show another moment than the one sampled. */
-  private strayed = false;
   private socWaiting: SocMark[];
   private minuteWaiting: MinuteMark[] = [...MINUTE_MARKS];
 
-  /**
-   * @param seen  the physical states last looked at
-   * @param look  looks at the solution at a moment, so that the system shows it
-   */
   constructor(
     private readonly startSoc: number,
-    private readonly system: SessionSystem,
-    seen: readonly number[],
-    private readonly look: (t: number) => void,
+    private readonly solution: SessionSolution,
   ) {
+    const { seen, system } = solution;
     const { pack, charge } = system;
     for (const mark of SOC_MARKS)
       if (Number(mark) / 100 === startSoc) this.atSoc.set(mark, { tS: 0, stationJ: 0, batteryJ: 0 });
@@ -44,18 +37,22 @@ export class SessionMarks {
       () => ((pack.restV + pack.ohm * charge.current) * charge.current) / 1000,
       () => pack.hottestCore(seen),
       ...(pack.curves.anode === null ? [] : [() => -1000 * pack.lowestAnodeV(charge.current)]),
-    ].map((read) => ({ extreme: new Extreme(this.lookingAt(read), this.lookingAt(() => pack.soc)), read }));
+    ].map((read) => ({
+      extreme: new Extreme(
+        this.lookingAt(read),
+        this.lookingAt(() => pack.soc),
+      ),
+      read,
+    }));
   }
 
   /** Takes the moment just looked at into the extremes; leaves the system showing it. */
   sample(t: number): void {
     for (const { extreme, read } of this.tracked) {
-      if (this.strayed) this.look(t);
-      this.strayed = false;
+      this.solution.look(t);
       extreme.sample(t, read());
     }
-    if (this.strayed) this.look(t);
-    this.strayed = false;
+    this.solution.look(t);
   }
 
   /** A jump or the end comes next: what lies before it says nothing about peaks after it. */
@@ -65,31 +62,34 @@ export class SessionMarks {
 
   private lookingAt(read: () => number): (t: number) => number {
     return (t) => {
-      this.strayed = true;
-      this.look(t);
+      this.solution.look(t);
       return read();
     };
   }
 
   /** Adds to the time that a limit held [s]. */
   hold(code: number, seconds: number): void {
-    this.heldS[code]! += seconds;
+    this.heldS[code] += seconds;
   }
 
   /** Notes soc and minute marks passed between two moments of a step. */
   pass(step: Step, from: number, to: number): void {
-    const { zLow, zSpan, layout } = this.system.pack;
+    const { zLow, zSpan, layout } = this.solution.system.pack;
     while (this.socWaiting.length > 0) {
-      const mark = this.socWaiting[0]!;
+      const mark = this.socWaiting[0];
       const off = (t: number) => step.dense(0, t) - (zLow + (zSpan * Number(mark)) / 100);
       if (off(to) < 0) break;
       const start = off(from);
       const tS = start < 0 ? findRoot(off, from, start, to, off(to), 1e-7) : from;
-      this.atSoc.set(mark, { tS, stationJ: step.dense(layout.integrals, tS), batteryJ: step.dense(layout.integrals + 9, tS) });
+      this.atSoc.set(mark, {
+        tS,
+        stationJ: step.dense(layout.integrals, tS),
+        batteryJ: step.dense(layout.integrals + 9, tS),
+      });
       this.socWaiting = this.socWaiting.slice(1);
     }
     while (this.minuteWaiting.length > 0 && Number(this.minuteWaiting[0]) * 60 <= to) {
-      const mark = this.minuteWaiting[0]!;
+      const mark = this.minuteWaiting[0];
       this.batteryJAt.set(mark, step.dense(layout.integrals + 9, Number(mark) * 60));
       this.minuteWaiting = this.minuteWaiting.slice(1);
     }
@@ -97,13 +97,13 @@ export class SessionMarks {
 
   /** The session's headline numbers, from its end at `endS` with the whole state `y`. */
   metrics(endReason: EndReason, endS: number, y: readonly number[], session: Session): SessionMetrics {
-    const { zLow, zSpan, layout } = this.system.pack;
-    const stationJ = y[layout.integrals]!;
-    const batteryJ = y[layout.integrals + 9]!;
+    const { zLow, zSpan, layout } = this.solution.system.pack;
+    const stationJ = y[layout.integrals];
+    const batteryJ = y[layout.integrals + 9];
     const target = String(Math.round(session.targetSoc * 100)) as SocMark;
     if (endReason === 'target' && this.socWaiting[0] === target && Number(target) / 100 === session.targetSoc)
       this.atSoc.set(target, { tS: endS, stationJ, batteryJ });
-    const endSoc = endReason === 'target' && endS > 0 ? session.targetSoc : (y[0]! - zLow) / zSpan;
+    const endSoc = endReason === 'target' && endS > 0 ? session.targetSoc : (y[0] - zLow) / zSpan;
     const after = (mark: MinuteMark) => (this.batteryJAt.get(mark) ?? batteryJ) / J_PER_KWH;
     const km = (mark: MinuteMark) => (after(mark) * 1000) / session.whPerKm;
     return {
@@ -120,7 +120,7 @@ export class SessionMarks {
       batteryKwhAfterMin: record(MINUTE_MARKS, after),
       kmAfterMin: record(MINUTE_MARKS, km),
       ...this.temperatures(),
-      limitMinutes: record(limitCodes, (code: LimitCode) => this.heldS[limitCodes.indexOf(code)]! / 60),
+      limitMinutes: record(limitCodes, (code: LimitCode) => this.heldS[limitCodes.indexOf(code)] / 60),
     };
   }
 
@@ -138,20 +138,20 @@ export class SessionMarks {
   private peaks() {
     const [station, battery] = this.tracked.map(({ extreme }) => extreme);
     return {
-      peakStationPowerKw: station!.value,
-      peakStationPowerMin: station!.tS / 60,
-      peakStationPowerSoc: station!.soc,
-      peakBatteryPowerKw: battery!.value,
-      peakBatteryPowerMin: battery!.tS / 60,
-      peakBatteryPowerSoc: battery!.soc,
+      peakStationPowerKw: station.value,
+      peakStationPowerMin: station.tS / 60,
+      peakStationPowerSoc: station.soc,
+      peakBatteryPowerKw: battery.value,
+      peakBatteryPowerMin: battery.tS / 60,
+      peakBatteryPowerSoc: battery.soc,
     };
   }
 
   private temperatures() {
     const [, , core, anode] = this.tracked.map(({ extreme }) => extreme);
     return {
-      hottestCoreC: core!.value,
-      hottestCoreMin: core!.tS / 60,
+      hottestCoreC: core.value,
+      hottestCoreMin: core.tS / 60,
       lowestAnodeMv: anode ? -anode.value : null,
       lowestAnodeMin: anode ? anode.tS / 60 : null,
     };

@@ -34,7 +34,7 @@ export class SessionSystem {
   /** Reads a state at t seconds after plug-in and decides the current there by all limits. */
   at(t: number, y: ArrayLike<number>): void {
     this.pack.observe(y);
-    this.charge.decide(t, y[this.pack.layout.inlet]!);
+    this.charge.decide(t, y[this.pack.layout.inlet]);
   }
 
   /** dy/dt for the integrator. */
@@ -42,14 +42,14 @@ export class SessionSystem {
     const { pack, charge } = this;
     const { inlet, integrals } = pack.layout;
     pack.observe(y);
-    if (this.followed < 0) charge.decide(t, y[inlet]!);
-    else charge.follow(this.followed, t, y[inlet]!);
+    if (this.followed < 0) charge.decide(t, y[inlet]);
+    else charge.follow(this.followed, t, y[inlet]);
     const { current, stationCurrent } = charge;
     pack.rates(y, dy, current, stationCurrent);
     dy[integrals] = charge.stationVoltage * stationCurrent;
     dy[integrals + 2] = charge.boostLossW;
     // Every state feeds one of these sums, so anything not finite shows here; odex would take NaN for converged.
-    const sum = dy[integrals + 9]! + dy[integrals + 12]! + pack.coolant.outC + y[inlet]! + stationCurrent;
+    const sum = dy[integrals + 9] + dy[integrals + 12] + pack.coolant.outC + y[inlet] + stationCurrent;
     if (!(sum - sum === 0)) throw new NotFinite();
   };
 
@@ -63,10 +63,16 @@ export class SessionSystem {
     const name = 'the surface node’s heat capacity against its conductances (thermal)';
     if (pack.layout.twoNode) {
       candidates.push({ seconds: pack.surfaceJPerK / (pack.coreToSurface + outward), name });
-      candidates.push({ seconds: pack.coreJPerK / pack.coreToSurface, name: 'the core node’s heat capacity (thermal)' });
+      candidates.push({
+        seconds: pack.coreJPerK / pack.coreToSurface,
+        name: 'the core node’s heat capacity (thermal)',
+      });
     } else candidates.push({ seconds: pack.coreJPerK / (outward || 1e-9), name });
     if (coolant.flowWPerK > 0)
-      candidates.push({ seconds: coolant.loopJPerK / coolant.flowWPerK, name: 'the coolant loop’s volume against its flow (thermal.coolant)' });
+      candidates.push({
+        seconds: coolant.loopJPerK / coolant.flowWPerK,
+        name: 'the coolant loop’s volume against its flow (thermal.coolant)',
+      });
     return candidates.reduce((a, b) => (b.seconds < a.seconds ? b : a), { seconds: 1e9, name: 'none' });
   }
 }

@@ -1,12 +1,13 @@
 import { findRoot } from '../integrate/find-root.ts';
 import { Stepper, type Step } from '../integrate/stepper.ts';
 import type { SessionStudy } from '../study/schema.ts';
-import { LIMIT } from './charge-current.ts';
+import { endsAtCutoff, firstHappening, MOMENT_S, REACHED_V, type Happening } from './happenings.ts';
 import { energyLedger, thermalLedger } from './ledgers.ts';
 import { limitCodes } from './limits.ts';
 import { SessionMarks } from './session-marks.ts';
 import type { EndReason, RunEvent, SessionResult } from './result.ts';
 import { SeriesRecorder } from './series-recorder.ts';
+import { SessionSolution } from './session-solution.ts';
 import { inconsistent, NotFinite, SessionSystem } from './session-system.ts';
 import { tolerances } from './tolerances.ts';
 
@@ -17,11 +18,13 @@ export type SessionOptions = {
   rtol?: number;
   /** Called now and then with the share done, 0 to 1. */
   onProgress?: (share: number) => void;
+  /** Most evaluations of the derivative before the run gives up. */
+  maxEvaluations?: number;
   /** Stop the integration where one limit hands over to another (default), or let steps run across. */
   stopAtSwitchOvers?: boolean;
 };
 
-export type RunStatistics = { evaluations: number; observations: number; steps: number; starts: number; rows: number };
+export type RunStatistics = { evaluations: number; looks: number; steps: number; starts: number; rows: number };
 
 export type SessionRun = {
   result: SessionResult;
@@ -31,14 +34,16 @@ export type SessionRun = {
 };
 
 export const DEFAULT_EVERY_S = 10;
-export const DEFAULT_RTOL = 1e-5;
+export const DEFAULT_RTOL = 5e-6;
 const MAX_EVALUATIONS = 2_000_000;
+const MAX_HAND_OVERS = 10_000;
+/** Longest step as a multiple of the shortest time constant, and the first step after a start [s]: measured, see the bench. */
+const STABLE_STEPS = 3;
+const FIRST_STEP_S = 2;
+/** A ledge is left downwards only this far below its edge, so that the dip at plug-in does not rattle on one [soc]. */
+const LEDGE_LEFT_SOC = 1e-6;
 /** Longest gap between two looks at the solution [s], whatever the output grid. */
 const LONGEST_LOOK_S = 15;
-/** How exactly moments are found [s]. */
-const MOMENT_S = 1e-7;
-/** A voltage-ledge counts as reached this near [V]. */
-const REACHED_V = 1e-9;
 
 /**
  * Runs one charging session.
@@ -53,6 +58,7 @@ export function simulateSession(study: SessionStudy, options: SessionOptions = {
 
 class SessionSimulation {
   private readonly system: SessionSystem;
+  private readonly solution: SessionSolution;
   private readonly stepper: Stepper;
   private readonly recorder: SeriesRecorder;
   private readonly marks: SessionMarks;
@@ -60,51 +66,36 @@ class SessionSimulation {
   private readonly powerSteps: { atS: number; watts: number }[];
   private readonly everyS: number;
   private readonly endS: number;
-  private readonly stopAtSwitchOvers: boolean;
-  private readonly onProgress: ((share: number) => void) | undefined;
 
-  /** Where the run stands: time [s], full state, and the state last looked at. */
+  /** Where the integration stands: time [s] and whole state. */
   private t = 0;
   private y: number[];
-  private readonly seen: number[];
-  private observations = 0;
-  /** Limit in force, since when it holds, up to when the solution is settled, and the moment the system shows [s]. */
+  /** Up to when rows, marks and hand-overs are settled [s]. */
+  private settledS = 0;
+  /** Limit in force (index in `limitCodes`), since when [s], and how often it has changed. */
   private code = -1;
-  private lookedS = 0;
-  private lookedAt = 0;
-  private handOvers = 0;
   private heldSinceS = 0;
+  private handOvers = 0;
   private nextRowS: number;
   private ended: EndReason | null = null;
-  /** The step under way and the one before it. */
-  private step: Step | null = null;
-  private before: Step | null = null;
 
   constructor(
     private readonly study: SessionStudy,
-    options: SessionOptions,
+    private readonly options: SessionOptions,
   ) {
-    const rtol = options.rtol ?? DEFAULT_RTOL;
-    this.everyS = options.everyS ?? DEFAULT_EVERY_S;
-    this.stopAtSwitchOvers = options.stopAtSwitchOvers ?? true;
-    this.onProgress = options.onProgress;
     this.system = new SessionSystem(study);
-    const { pack } = this.system;
-    const fastest = this.system.fastest();
-    this.stepper = new Stepper(this.system.derivative, {
-      ...tolerances(pack, rtol),
-      maxStepS: STABLE_STEPS * fastest.seconds,
-      firstStepS: Math.min(FIRST_STEP_S, fastest.seconds),
-      maxEvaluations: MAX_EVALUATIONS,
-      diagnose: () => `the shortest time constant is ${fastest.seconds.toPrecision(3)} s, of ${fastest.name}`,
-    });
-    this.recorder = new SeriesRecorder(pack, this.system.charge);
-    this.seen = new Array<number>(pack.layout.integrals).fill(0);
-    this.marks = new SessionMarks(study.session.startSoc, this.system, this.seen, (t) => this.look(t));
+    this.solution = new SessionSolution(this.system);
+    this.stepper = this.makeStepper();
+    this.recorder = new SeriesRecorder(this.system.pack, this.system.charge);
+    this.marks = new SessionMarks(study.session.startSoc, this.solution);
     this.y = this.system.start;
+    this.everyS = options.everyS ?? DEFAULT_EVERY_S;
     this.nextRowS = this.everyS;
     this.endS = study.session.maxMin * 60;
-    this.powerSteps = (study.station.powerSteps ?? []).map(({ atMin, powerKw }) => ({ atS: atMin * 60, watts: powerKw * 1000 }));
+    this.powerSteps = (study.station.powerSteps ?? []).map(({ atMin, powerKw }) => ({
+      atS: atMin * 60,
+      watts: powerKw * 1000,
+    }));
   }
 
   run(): SessionRun {
@@ -113,83 +104,91 @@ class SessionSimulation {
     return this.finish();
   }
 
+  private makeStepper(): Stepper {
+    const fastest = this.system.fastest();
+    return new Stepper(this.system.derivative, {
+      ...tolerances(this.system.pack, this.options.rtol ?? DEFAULT_RTOL),
+      maxStepS: STABLE_STEPS * fastest.seconds,
+      firstStepS: Math.min(FIRST_STEP_S, fastest.seconds),
+      maxEvaluations: this.options.maxEvaluations ?? MAX_EVALUATIONS,
+      diagnose: () => `the shortest time constant is ${fastest.seconds.toPrecision(3)} s, of ${fastest.name}`,
+    });
+  }
+
   private plugIn(): void {
-    const { taper, charge } = this.system;
     const { startSoc, targetSoc } = this.study.session;
     if (this.system.boosted) this.event('boost');
-    if (taper.shape === 'ledges') taper.step = taper.stepAtSoc(startSoc);
+    this.system.taper.startAt(startSoc);
     if (this.powerSteps[0]?.atS === 0) this.takePowerStep();
-    for (let i = 0; i < this.seen.length; i++) this.seen[i] = this.y[i]!;
-    this.decideHere();
+    this.solution.decide(0);
     this.climbVoltageLedges();
-    this.code = charge.code;
+    this.code = this.system.charge.code;
     this.event(`limit:${limitCodes[this.code]}`);
-    this.recorder.row(0, this.seen, this.code);
+    this.row(this.code);
     this.marks.sample(0);
-    if (startSoc >= targetSoc) this.end('target', false);
-    else if (this.isCutoff()) this.end('cutoff', false);
+    if (startSoc >= targetSoc) this.end('target');
+    else if (this.isSpent()) this.end('cutoff');
   }
 
   /** Integrates from here to the next jump, hand-over or end. */
   private integrate(): void {
-    const nextPower = this.powerSteps[0]?.atS ?? Infinity;
-    const stop = Math.min(this.endS, nextPower);
-    this.system.followed = this.stopAtSwitchOvers ? this.code : -1;
-    this.before = this.step;
+    const nextPowerS = this.powerSteps[0]?.atS ?? Infinity;
+    const stopS = Math.min(this.endS, nextPowerS);
+    this.system.followed = this.options.stopAtSwitchOvers === false ? -1 : this.code;
     try {
-      for (const step of this.stepper.from(this.t, this.y, stop)) {
-        this.step = step;
-        if (this.walk(step)) return;
-        this.before = step;
+      for (const step of this.stepper.from(this.t, this.y, stopS)) {
+        this.solution.advance(step);
+        if (this.walk(step, stopS)) return;
         this.t = step.t1;
         this.y = step.y;
-        this.onProgress?.(this.share());
+        this.options.onProgress?.(this.share());
       }
     } catch (error) {
       throw error instanceof NotFinite ? inconsistent(this.t) : error;
     }
-    if (nextPower < this.endS) this.jump(() => this.takePowerStep());
-    else this.end('maxMin');
+    if (nextPowerS < this.endS) this.jump(() => this.takePowerStep());
+    else this.finalRow('maxMin');
   }
 
   private share(): number {
-    const { startSoc, targetSoc } = this.study.session;
-    return Math.min(1, Math.max(0, (this.system.pack.soc - startSoc) / (targetSoc - startSoc)));
+    const { startSoc, targetSoc, maxMin } = this.study.session;
+    const charged = (this.system.pack.soc - startSoc) / (targetSoc - startSoc);
+    return Math.min(1, Math.max(0, charged, this.t / 60 / maxMin));
   }
 
   /**
    * Looks along one step, from grid row to grid row, until its end or until something happens on the way.
    * Returns true where the integration must start again or is over.
    */
-  private walk(step: Step): boolean {
+  private walk(step: Step, stopS: number): boolean {
     const crossing = this.socCrossing(step);
     const end = crossing?.t ?? step.t1;
-    while (this.lookedS < end) {
-      const to = Math.min(this.nextRowS, this.lookedS + LONGEST_LOOK_S, end);
-      const happening = this.firstBetween(this.lookedS, to);
-      this.arrive(happening?.t ?? to, happening === null && (crossing === null || to < end) && to < this.stopS());
-      if (happening !== null && this.take(happening)) return true;
+    const quietEnd = crossing === null && end < stopS;
+    while (this.settledS < end) {
+      const from = this.settledS;
+      const to = Math.min(this.nextRowS, from + LONGEST_LOOK_S, end);
+      const happening = firstHappening(this.solution, this.code, this.study.strategy.cutoffA, from, to);
+      this.settle(step, happening?.t ?? to);
+      if (happening !== null) {
+        if (this.take(happening)) return true;
+      } else if (to >= this.nextRowS && (to < end || quietEnd)) {
+        this.row(this.code);
+        this.nextRowS = this.rowAfter(to);
+      }
     }
     if (crossing === null) return false;
     this.stopAt(end);
-    if (crossing.step === null) this.end('target');
-    else this.jump(() => this.takeLedge(crossing.step!));
+    if (crossing.ledge === null) this.finalRow('target');
+    else this.jump(() => this.takeLedge(crossing.ledge!));
     return true;
   }
 
-  private stopS(): number {
-    return Math.min(this.endS, this.powerSteps[0]?.atS ?? Infinity);
-  }
-
-  /** Settles a moment: the marks passed on the way to it, extremes, and a row if the grid asks for one. */
-  private arrive(t: number, mayRecord: boolean): void {
-    this.look(t);
+  /** Takes the marks and extremes on the way to a moment, and leaves the system showing it. */
+  private settle(step: Step, t: number): void {
+    this.solution.look(t);
     this.marks.sample(t);
-    this.marks.pass(this.step!, this.lookedS, t);
-    this.lookedS = t;
-    if (!mayRecord || t < this.nextRowS) return;
-    this.recorder.row(t, this.seen, this.code);
-    this.nextRowS = this.rowAfter(t);
+    this.marks.pass(step, this.settledS, t);
+    this.settledS = t;
   }
 
   private rowAfter(t: number): number {
@@ -197,100 +196,38 @@ class SessionSimulation {
   }
 
   /** Where this step first meets the target or a ledge's edge, by soc alone. */
-  private socCrossing(step: Step): { t: number; step: number | null } | null {
-    const { taper } = this.system;
-    const socEnd = this.socAt(step, step.t1);
-    const target = this.study.session.targetSoc;
-    const ledges = taper.shape === 'ledges' ? taper.edges : NO_EDGES;
-    const next = ledges[taper.step + 1] ?? Infinity;
-    const left = (ledges[taper.step] ?? -Infinity) - LEDGE_LEFT_SOC;
-    if (next < target && socEnd >= next) return { t: this.whenSoc(step, next), step: taper.step + 1 };
-    if (socEnd >= target) return { t: this.whenSoc(step, target), step: null };
-    if (socEnd < left) return { t: this.whenSoc(step, left), step: taper.step - 1 };
+  private socCrossing(step: Step): { t: number; ledge: number | null } | null {
+    const { taper, pack } = this.system;
+    const { targetSoc } = this.study.session;
+    const off = (soc: number) => (t: number) => step.dense(0, t) - (pack.zLow + pack.zSpan * soc);
+    const when = (soc: number) => {
+      const f = off(soc);
+      return findRoot(f, step.t0, f(step.t0), step.t1, f(step.t1), MOMENT_S);
+    };
+    const left = taper.startSoc - LEDGE_LEFT_SOC;
+    if (taper.endSoc < targetSoc && off(taper.endSoc)(step.t1) >= 0)
+      return { t: when(taper.endSoc), ledge: taper.step + 1 };
+    if (off(targetSoc)(step.t1) >= 0) return { t: when(targetSoc), ledge: null };
+    if (left > -Infinity && off(left)(step.t1) < 0) return { t: when(left), ledge: taper.step - 1 };
     return null;
   }
 
-  private socAt(step: Step, t: number): number {
-    const { zLow, zSpan } = this.system.pack;
-    return (step.dense(0, t) - zLow) / zSpan;
-  }
-
-  private whenSoc(step: Step, soc: number): number {
-    const off = (t: number) => this.socAt(step, t) - soc;
-    return findRoot(off, step.t0, off(step.t0), step.t1, off(step.t1), MOMENT_S);
-  }
-
-  /** The first thing that happens after one look and up to the next, if anything does; the next has not been looked at yet. */
-  private firstBetween(from: number, to: number): Happening | null {
-    const { charge, pack, taper } = this.system;
-    this.look(to);
-    const code = charge.code;
-    const until = taper.shape === 'voltage-ledges' ? (taper.edges[taper.step + 1] ?? Infinity) - REACHED_V : Infinity;
-    const overLedge = pack.highestCellV(charge.current) >= until;
-    const found: Happening[] = [];
-    if (overLedge) found.push({ kind: 'voltage-ledge', t: this.crossing(() => pack.highestCellV(charge.current) - until, from, to) });
-    if (code !== this.code) found.push(this.handOver(from, to, code));
-    if (ENDING.has(this.code) && this.room() <= 0) found.push({ kind: 'cutoff', t: this.crossing(() => -this.room(), from, to) });
-    if (found.length === 0) return null;
-    return found.reduce((a, b) => (b.t < a.t ? b : a));
-  }
-
-  /** What the limit in force allows above the end current, at the moment last looked at [A]. */
-  private room(): number {
-    const inletC = this.seen[this.system.pack.layout.inlet]!;
-    return this.system.charge.allowedBy(this.code, this.lookedAt, inletC) - this.study.strategy.cutoffA;
-  }
-
-  /** First moment at which `value`, read after a look, is no longer below 0; it is not below 0 at `to`. */
-  private crossing(value: () => number, from: number, to: number): number {
-    const at = (t: number) => {
-      this.look(t);
-      return value();
-    };
-    const start = at(from);
-    return start >= 0 ? from : findRoot(at, from, start, to, at(to), MOMENT_S);
-  }
-
-  /** The moment at which the limit in force gives way to another, which is the one that binds at `to` unless a third comes first. */
-  private handOver(from: number, to: number, code: number): Happening {
-    const { charge, pack } = this.system;
-    const held = this.code;
-    let t = to;
-    for (let round = 0; round < limitCodes.length; round++) {
-      const other = code;
-      const lead = () => {
-        const inletC = this.seen[pack.layout.inlet]!;
-        return charge.allowedBy(held, this.lookedAt, inletC) - charge.allowedBy(other, this.lookedAt, inletC);
-      };
-      t = this.crossing(lead, from, t);
-      this.look(t);
-      if (charge.code === held || charge.code === other) break;
-      code = charge.code;
-    }
-    return { kind: 'hand-over', t, code };
-  }
-
-  /** Deals with what happened at the moment just arrived at; true where the integration must start again or is over. */
-  private take(happening: Happening): boolean {
-    const { t } = happening;
-    if (happening.kind === 'cutoff') {
+  /** Deals with what happened at the moment just settled; true where the integration must start again or is over. */
+  private take({ t, kind, code }: Happening): boolean {
+    if (kind === 'hand-over') {
+      this.row(this.code);
+      this.row(code);
+      if (t === this.nextRowS) this.nextRowS = this.rowAfter(t);
+      this.changeCode(t, code);
+      const spent = endsAtCutoff(code) && this.solution.allowedBy(code) <= this.study.strategy.cutoffA;
+      if (!spent && this.options.stopAtSwitchOvers === false) return false;
       this.stopAt(t);
-      this.end('cutoff');
+      if (spent) this.end('cutoff');
       return true;
     }
-    if (happening.kind === 'voltage-ledge') {
-      this.stopAt(t);
-      this.jump(() => this.climbVoltageLedges());
-      return true;
-    }
-    this.recorder.row(t, this.seen, this.code);
-    this.recorder.row(t, this.seen, happening.code);
-    if (t === this.nextRowS) this.nextRowS = this.rowAfter(t);
-    this.changeCode(t, happening.code);
-    const over = ENDING.has(this.code) && this.room() <= 0;
-    if (!over && !this.stopAtSwitchOvers) return false;
     this.stopAt(t);
-    if (over) this.end('cutoff', false);
+    if (kind === 'cutoff') this.finalRow('cutoff');
+    else this.jump(() => this.climbVoltageLedges());
     return true;
   }
 
@@ -303,9 +240,10 @@ class SessionSimulation {
     this.events.push({ tS: t, event: `limit:${limitCodes[code]}` });
   }
 
-  private isCutoff(): boolean {
+  /** Whether the current shown now ends the session. */
+  private isSpent(): boolean {
     const { charge } = this.system;
-    return ENDING.has(charge.code) && charge.current <= this.study.strategy.cutoffA;
+    return endsAtCutoff(charge.code) && charge.current <= this.study.strategy.cutoffA;
   }
 
   private takePowerStep(): void {
@@ -322,64 +260,52 @@ class SessionSimulation {
   /** Moves to the step that the highest cell voltage has reached; moves chain at once. */
   private climbVoltageLedges(): void {
     const { taper, pack, charge } = this.system;
-    if (taper.shape !== 'voltage-ledges') return;
-    while (taper.step + 1 < taper.edges.length && pack.highestCellV(charge.current) >= taper.edges[taper.step + 1]! - REACHED_V) {
-      taper.step++;
-      this.event(`ledge:${taper.step + 1}`);
-      this.decideHere();
+    while (pack.highestCellV(charge.current) >= taper.endV - REACHED_V) {
+      this.takeLedge(taper.step + 1);
+      this.solution.decide(this.t);
     }
   }
 
-  /** Makes a change at the present moment, which was arrived at, and records both sides where the current jumps. */
+  /** Makes a change at the present moment, and records both sides where the current jumps. */
   private jump(change: () => void): void {
     const { charge } = this.system;
     const { t, code } = this;
     this.marks.close();
-    this.look(t);
+    this.solution.look(t);
     const before = charge.current;
-    this.recorder.row(t, this.seen, code);
+    this.row(code);
     change();
-    this.decideHere();
+    this.solution.decide(t);
     const jumped = Math.abs(charge.current - before) > 1e-9 * (1 + Math.abs(before)) || charge.code !== code;
     const onGrid = t === this.nextRowS;
     if (onGrid) this.nextRowS = this.rowAfter(t);
-    if (jumped) this.recorder.row(t, this.seen, charge.code);
+    if (jumped) this.row(charge.code);
     else if (!onGrid) this.recorder.drop();
     this.marks.sample(t);
     this.changeCode(t, charge.code);
-    if (this.isCutoff()) this.end('cutoff', false);
+    if (this.isSpent()) this.end('cutoff');
   }
 
-  private end(reason: EndReason, record = true): void {
+  private row(code: number): void {
+    this.recorder.row(this.solution.at, this.solution.seen, code);
+  }
+
+  private finalRow(reason: EndReason): void {
+    this.solution.look(this.t);
+    this.row(this.code);
+    this.end(reason);
+  }
+
+  private end(reason: EndReason): void {
     this.marks.close();
-    if (record) {
-      this.look(this.t);
-      this.recorder.row(this.t, this.seen, this.code);
-    }
     this.marks.hold(this.code, this.t - this.heldSinceS);
     this.ended = reason;
     this.event(`end:${reason}`);
   }
 
-  /** Takes the whole state, integrals too, from the step under way at a moment inside it. */
   private stopAt(t: number): void {
-    const step = this.step!;
     this.t = t;
-    this.y = step.y.map((_, i) => step.dense(i, t));
-  }
-
-  /** Observes the solution at a moment of this step or the one before it, and decides the current there. */
-  private look(t: number): void {
-    const step = this.before !== null && this.step !== null && t < this.step.t0 ? this.before : this.step;
-    if (step !== null) for (let i = 0; i < this.seen.length; i++) this.seen[i] = step.dense(i, t);
-    this.observations++;
-    this.lookedAt = t;
-    this.system.at(t, this.seen);
-  }
-
-  private decideHere(): void {
-    this.lookedAt = this.t;
-    this.system.at(this.t, this.seen);
+    this.y = this.solution.stateAt(t);
   }
 
   private event(event: string): void {
@@ -387,33 +313,20 @@ class SessionSimulation {
   }
 
   private finish(): SessionRun {
-    const { pack } = this.system;
-    const { rectifierEfficiency } = this.study.station;
-    const metrics = this.marks.metrics(this.ended!, this.t, this.y, this.study.session);
+    const { pack, start } = this.system;
     const result: SessionResult = {
       format: 'voltiplano/result',
       version: 1,
       kind: 'session',
       title: this.study.title ?? '',
-      metrics,
-      energyLedger: energyLedger(pack, this.system.start, this.y, rectifierEfficiency),
-      thermalLedger: thermalLedger(pack, this.system.start, this.y),
+      metrics: this.marks.metrics(this.ended!, this.t, this.y, this.study.session),
+      energyLedger: energyLedger(pack, start, this.y, this.study.station.rectifierEfficiency),
+      thermalLedger: thermalLedger(pack, start, this.y),
       events: this.events,
       series: this.recorder.series,
     };
     const { evaluations, steps, starts } = this.stepper;
-    const rows = this.recorder.series.tS.length;
-    return { result, finalState: this.y, statistics: { evaluations, observations: this.observations, steps, starts, rows } };
+    const statistics = { evaluations, looks: this.solution.looks, steps, starts, rows: result.series.tS.length };
+    return { result, finalState: this.y, statistics };
   }
 }
-
-/** Longest step as a multiple of the shortest time constant, and the first step after a start [s] (measured, see bench). */
-const STABLE_STEPS = Number((globalThis as any).STABLE ?? 3);
-const FIRST_STEP_S = 2;
-const MAX_HAND_OVERS = 10_000;
-/** A ledge is left downwards only this far below its edge, so that the dip at plug-in does not rattle on one [soc]. */
-const LEDGE_LEFT_SOC = 1e-6;
-const NO_EDGES = new Float64Array(0);
-const ENDING = new Set([LIMIT['cell-voltage'], LIMIT.taper, LIMIT.anode]);
-
-type Happening = { t: number; kind: 'voltage-ledge' | 'cutoff' } | { t: number; kind: 'hand-over'; code: number };

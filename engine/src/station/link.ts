@@ -32,7 +32,13 @@ export function packCurrentForStationPower(A: number, B: number, aux: number, in
 }
 
 /** Pack current at which the inlet stands at `volts` [A], never below what no station current leaves. */
-export function packCurrentForStationVoltage(A: number, B: number, aux: number, inletOhm: number, volts: number): number {
+export function packCurrentForStationVoltage(
+  A: number,
+  B: number,
+  aux: number,
+  inletOhm: number,
+  volts: number,
+): number {
   const r = inletOhm / B;
   const b = volts + r * A;
   const disc = b * b - 4 * (1 + r) * inletOhm * aux;

@@ -35,7 +35,10 @@ export function parseStudy(json: unknown): Study {
   const schema = kind === 'session' || kind === 'trip' ? KINDS[kind] : studySchema;
   const result = schema.safeParse(json);
   if (result.success) return result.data;
-  throw new StudyError('INVALID_STUDY', result.error.issues.flatMap((issue) => toIssues(issue, json)));
+  throw new StudyError(
+    'INVALID_STUDY',
+    result.error.issues.flatMap((issue) => toIssues(issue, json)),
+  );
 }
 
 /** As `parseStudy`, for a caller that needs a session. */
@@ -64,8 +67,9 @@ function toIssues(issue: Issue, json: unknown): StudyIssue[] {
 
 /** Of a union's branches, the complaints of the one that came closest. */
 function unionIssues(issue: Issue & { code: 'invalid_union' }, json: unknown): StudyIssue[] {
-  const depth = (errors: Issue[]) => Math.max(...errors.map((one) => one.path.length * 2 - (one.code === 'unrecognized_keys' ? 1 : 0)));
-  const best = [...issue.errors].sort((a, b) => depth(b) - depth(a) || a.length - b.length)[0]!;
+  const depth = (errors: Issue[]) =>
+    Math.max(...errors.map((one) => one.path.length * 2 - (one.code === 'unrecognized_keys' ? 1 : 0)));
+  const best = [...issue.errors].sort((a, b) => depth(b) - depth(a) || a.length - b.length)[0];
   return best.flatMap((one) => toIssues({ ...one, path: [...issue.path, ...one.path] }, json));
 }
 
@@ -77,11 +81,20 @@ function ruleOf(issue: Issue, found: unknown): { rule: string; text: string } {
     case 'too_small':
       return { rule: 'range', text: tooSmall(issue, found, but) };
     case 'too_big':
-      return { rule: 'range', text: issue.origin === 'number' || issue.origin === 'int' ? `must be at most ${issue.maximum}${but}` : `must have at most ${issue.maximum} entries` };
+      return {
+        rule: 'range',
+        text:
+          issue.origin === 'number' || issue.origin === 'int'
+            ? `must be at most ${issue.maximum}${but}`
+            : `must have at most ${issue.maximum} entries`,
+      };
     case 'invalid_type':
       return found === undefined
         ? { rule: 'missing', text: 'is missing' }
-        : { rule: 'type', text: `must be ${issue.expected === 'int' ? 'a whole number' : `a ${issue.expected}`}${but}` };
+        : {
+            rule: 'type',
+            text: `must be ${issue.expected === 'int' ? 'a whole number' : `a ${issue.expected}`}${but}`,
+          };
     case 'invalid_value':
       return { rule: 'choice', text: `must be ${issue.values.map((value) => show(value)).join(' or ')}${but}` };
     default:
@@ -100,5 +113,8 @@ function valueAt(json: unknown, path: PropertyKey[]): unknown {
 
 /** A path as a person writes it: `strategy.taper.points[3].soc`. */
 export function pathText(path: PropertyKey[]): string {
-  return path.reduce<string>((text, key) => (typeof key === 'number' ? `${text}[${key}]` : text ? `${text}.${String(key)}` : String(key)), '');
+  return path.reduce<string>(
+    (text, key) => (typeof key === 'number' ? `${text}[${key}]` : text ? `${text}.${String(key)}` : String(key)),
+    '',
+  );
 }

@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { quantities, type Quantity, type QuantityPath } from './quantities.ts';
+import type { Quantity } from './quantity.ts';
+import { quantities, type QuantityPath } from './quantities.ts';
 
 /** A number held to its range in the table of quantities, described for the JSON Schema. */
 export function quantity(path: QuantityPath) {
@@ -9,19 +10,27 @@ export function quantity(path: QuantityPath) {
   return schema.lte(max).meta({ title: label, description: unit ? `${what} [${unit}]` : what });
 }
 
-type Context = { addIssue(issue: { code: 'custom'; path: (string | number)[]; message: string; params: { rule: string } }): void };
+type Context = {
+  addIssue(issue: { code: 'custom'; path: (string | number)[]; message: string; params: { rule: string } }): void;
+};
 type PathOf = (row: number) => (string | number)[];
 
 /** Adds an issue at the first row that does not rise above the one before it. */
 export function rising(context: Context, values: readonly number[], pathOf: PathOf): void {
-  const at = values.findIndex((value, i) => i > 0 && !(value > values[i - 1]!));
+  const at = values.findIndex((value, i) => i > 0 && !(value > values[i - 1]));
   if (at < 0) return;
   const message = `must rise from row to row, but is ${values[at]} after ${values[at - 1]}`;
   context.addIssue({ code: 'custom', path: pathOf(at), message, params: { rule: 'must-rise' } });
 }
 
 /** Adds an issue unless `high` lies above `low`; both ends are named in the message. */
-export function mustLieAbove(context: Context, path: (string | number)[], high: number, lowName: string, low: number): void {
+export function mustLieAbove(
+  context: Context,
+  path: (string | number)[],
+  high: number,
+  lowName: string,
+  low: number,
+): void {
   if (high > low) return;
   context.addIssue({
     code: 'custom',
@@ -42,7 +51,13 @@ export function table(y: z.ZodType<number, number>) {
 }
 
 /** Adds an issue unless two columns have as many rows. */
-export function sameLength(context: Context, a: readonly unknown[], b: readonly unknown[], bName: string, aName: string): void {
+export function sameLength(
+  context: Context,
+  a: readonly unknown[],
+  b: readonly unknown[],
+  bName: string,
+  aName: string,
+): void {
   if (a.length === b.length) return;
   const message = `must have one value for each row of ${aName} (${a.length}), but has ${b.length}`;
   context.addIssue({ code: 'custom', path: [bName], message, params: { rule: 'shape' } });

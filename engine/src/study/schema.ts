@@ -23,7 +23,9 @@ const cell = z
       .default([]),
     resistanceShape: table(z.number().gt(0).lte(1000)).optional(),
     activationKjPerMol: quantity('cell.activationKjPerMol'),
-    anode: z.strictObject({ potential: z.union([electrodes, table(volts)]), share: quantity('cell.anode.share') }).optional(),
+    anode: z
+      .strictObject({ potential: z.union([electrodes, table(volts)]), share: quantity('cell.anode.share') })
+      .optional(),
     vMaxV: quantity('cell.vMaxV'),
     vMinV: quantity('cell.vMinV'),
   })
@@ -31,7 +33,7 @@ const cell = z
     mustLieAbove(context, ['vMaxV'], value.vMaxV, 'vMinV', value.vMinV);
     if ('electrodes' in value.ocv) return;
     const { y } = value.ocv;
-    mustLieAbove(context, ['ocv', 'y', y.length - 1], y[y.length - 1]!, 'the first row', y[0]!);
+    mustLieAbove(context, ['ocv', 'y', y.length - 1], y[y.length - 1], 'the first row', y[0]);
   });
 
 const pack = z
@@ -46,7 +48,9 @@ const pack = z
     structureJPerK: quantity('pack.structureJPerK').default(0),
     segments: quantity('pack.segments').default(1),
   })
-  .superRefine(({ socWindow: [low, high] }, context) => mustLieAbove(context, ['socWindow', 1], high, 'socWindow[0]', low));
+  .superRefine(({ socWindow: [low, high] }, context) =>
+    mustLieAbove(context, ['socWindow', 1], high, 'socWindow[0]', low),
+  );
 
 const band = (parts: { onC: number; fullC: number }, context: Parameters<typeof rising>[0]) =>
   mustLieAbove(context, ['fullC'], parts.fullC, 'onC', parts.onC);
@@ -105,7 +109,9 @@ const inlet = z
     derateFromC: quantity('inlet.derateFromC').default(75),
     derateToC: quantity('inlet.derateToC').default(90),
   })
-  .superRefine((value, context) => mustLieAbove(context, ['derateToC'], value.derateToC, 'derateFromC', value.derateFromC));
+  .superRefine((value, context) =>
+    mustLieAbove(context, ['derateToC'], value.derateToC, 'derateFromC', value.derateFromC),
+  );
 
 const station = z
   .strictObject({
@@ -117,12 +123,21 @@ const station = z
     rampAPerS: quantity('station.rampAPerS').default(20),
     rectifierEfficiency: quantity('station.rectifierEfficiency').default(0.95),
     powerSteps: z
-      .array(z.strictObject({ atMin: quantity('station.powerSteps[].atMin'), powerKw: quantity('station.powerSteps[].powerKw') }))
+      .array(
+        z.strictObject({
+          atMin: quantity('station.powerSteps[].atMin'),
+          powerKw: quantity('station.powerSteps[].powerKw'),
+        }),
+      )
       .optional(),
   })
   .superRefine((value, context) => {
     mustLieAbove(context, ['voltageMaxV'], value.voltageMaxV, 'voltageMinV', value.voltageMinV);
-    rising(context, (value.powerSteps ?? []).map((step) => step.atMin), (i) => ['powerSteps', i, 'atMin']);
+    rising(
+      context,
+      (value.powerSteps ?? []).map((step) => step.atMin),
+      (i) => ['powerSteps', i, 'atMin'],
+    );
   });
 
 const boost = z.strictObject({
@@ -241,20 +256,39 @@ const head = {
   title: z.string().max(300).optional(),
 };
 
-type Parts = { cell: z.output<typeof cell>; thermal: z.output<typeof thermal>; pack: z.output<typeof pack>; strategy: z.output<typeof strategy> };
+type Parts = {
+  cell: z.output<typeof cell>;
+  thermal: z.output<typeof thermal>;
+  pack: z.output<typeof pack>;
+  strategy: z.output<typeof strategy>;
+};
 
 /** Rules that hold between parts of a study. */
 function acrossParts(study: Parts, context: Parameters<typeof rising>[0]): void {
-  const add = (path: string[], rule: string, message: string) => context.addIssue({ code: 'custom', path, message, params: { rule } });
+  const add = (path: string[], rule: string, message: string) =>
+    context.addIssue({ code: 'custom', path, message, params: { rule } });
   const { cellVoltageCeilingV: ceiling, anodeMarginMv } = study.strategy;
   const { vMaxV, vMinV, anode } = study.cell;
-  if (ceiling > vMaxV) add(['strategy', 'cellVoltageCeilingV'], 'ceiling-above-cell', `must not pass cell.vMaxV (${vMaxV}), but is ${ceiling}`);
+  if (ceiling > vMaxV)
+    add(
+      ['strategy', 'cellVoltageCeilingV'],
+      'ceiling-above-cell',
+      `must not pass cell.vMaxV (${vMaxV}), but is ${ceiling}`,
+    );
   mustLieAbove(context, ['strategy', 'cellVoltageCeilingV'], ceiling, 'cell.vMinV', vMinV);
   if (anodeMarginMv !== undefined && !anode)
-    add(['strategy', 'anodeMarginMv'], 'needs-anode', `needs cell.anode: a margin of ${anodeMarginMv} mV cannot be guarded without the anode’s potential`);
+    add(
+      ['strategy', 'anodeMarginMv'],
+      'needs-anode',
+      `needs cell.anode: a margin of ${anodeMarginMv} mV cannot be guarded without the anode’s potential`,
+    );
   const surface = study.thermal.surfaceShare > 0 || study.pack.structureJPerK > 0;
   if (study.thermal.coreToSurfaceWPerK !== undefined && !surface)
-    add(['thermal', 'surfaceShare'], 'no-heat-capacity', 'must be above 0 where pack.structureJPerK is 0: the surface node needs a heat capacity');
+    add(
+      ['thermal', 'surfaceShare'],
+      'no-heat-capacity',
+      'must be above 0 where pack.structureJPerK is 0: the surface node needs a heat capacity',
+    );
 }
 
 export const sessionStudySchema = z

@@ -27,13 +27,19 @@ export class StudyError extends Error {
 }
 
 /** A study error with a single issue. */
-export function studyError(code: StudyErrorCode, path: string, rule: string, message: string, value?: unknown): StudyError {
+export function studyError(
+  code: StudyErrorCode,
+  path: string,
+  rule: string,
+  message: string,
+  value?: unknown,
+): StudyError {
   return new StudyError(code, [{ path, rule, message, ...(value === undefined ? {} : { value: show(value) }) }]);
 }
 
 /** A value as a person would read it back: numbers plain, text quoted, long things cut. */
 export function show(value: unknown): string {
   if (typeof value === 'number' || value === undefined) return String(value);
-  const text = JSON.stringify(value) ?? String(value);
+  const text = JSON.stringify(value) ?? typeof value;
   return text.length > 60 ? `${text.slice(0, 57)}…` : text;
 }

@@ -34,8 +34,18 @@ const map = z.strictObject({
 export const taperSchema = z
   .discriminatedUnion('shape', [z.strictObject({ shape: z.literal('none') }), slope, ledges, voltageLedges, map])
   .superRefine((taper, context) => {
-    if (taper.shape === 'slope') rising(context, taper.points.map((point) => point.soc), (i) => ['points', i, 'soc']);
-    if (taper.shape === 'ledges') rising(context, taper.steps.map((step) => step.fromSoc), (i) => ['steps', i, 'fromSoc']);
+    if (taper.shape === 'slope')
+      rising(
+        context,
+        taper.points.map((point) => point.soc),
+        (i) => ['points', i, 'soc'],
+      );
+    if (taper.shape === 'ledges')
+      rising(
+        context,
+        taper.steps.map((step) => step.fromSoc),
+        (i) => ['steps', i, 'fromSoc'],
+      );
     if (taper.shape === 'voltage-ledges') checkVoltageLedges(taper.steps, context);
     if (taper.shape === 'map') checkMap(taper, context);
   });
@@ -58,7 +68,8 @@ function checkVoltageLedges(steps: { untilCellV?: number | undefined }[], contex
 function checkMap(taper: { soc: number[]; tempC: number[]; values: number[][] }, context: Refinement): void {
   rising(context, taper.soc, (i) => ['soc', i]);
   rising(context, taper.tempC, (i) => ['tempC', i]);
-  const shapeFits = taper.values.length === taper.soc.length && taper.values.every((row) => row.length === taper.tempC.length);
+  const shapeFits =
+    taper.values.length === taper.soc.length && taper.values.every((row) => row.length === taper.tempC.length);
   if (shapeFits) return;
   context.addIssue({
     code: 'custom',

@@ -20,23 +20,29 @@ export class PiecewiseCubic {
   private readonly outside: ((x: number) => number) | null;
   private hint = 0;
 
-  private constructor(x: Float64Array, y: ArrayLike<number>, slopes: ArrayLike<number>, even: boolean, outside: ((x: number) => number) | null) {
+  private constructor(
+    x: Float64Array,
+    y: ArrayLike<number>,
+    slopes: ArrayLike<number>,
+    even: boolean,
+    outside: ((x: number) => number) | null,
+  ) {
     const pieces = x.length - 1;
     this.x = x;
     this.c = new Float64Array(4 * pieces);
     this.area = new Float64Array(pieces + 1);
     this.first = y[0]!;
     this.last = y[pieces]!;
-    this.perStep = even ? pieces / (x[pieces]! - x[0]!) : 0;
+    this.perStep = even ? pieces / (x[pieces] - x[0]) : 0;
     this.outside = outside;
     for (let i = 0; i < pieces; i++) {
-      const h = x[i + 1]! - x[i]!;
-      const secant = (y[i + 1]! - y[i]!) / h;
-      const d0 = slopes[i]!;
-      const d1 = slopes[i + 1]!;
-      const c = [y[i]!, d0, (3 * secant - 2 * d0 - d1) / h, (d0 + d1 - 2 * secant) / (h * h)];
+      const h = x[i + 1] - x[i];
+      const secant = (y[i + 1] - y[i]) / h;
+      const d0 = slopes[i];
+      const d1 = slopes[i + 1];
+      const c = [y[i], d0, (3 * secant - 2 * d0 - d1) / h, (d0 + d1 - 2 * secant) / (h * h)];
       this.c.set(c, 4 * i);
-      this.area[i + 1] = this.area[i]! + h * (c[0]! + h * (c[1]! / 2 + h * (c[2]! / 3 + (h * c[3]!) / 4)));
+      this.area[i + 1] = this.area[i] + h * (c[0] + h * (c[1] / 2 + h * (c[2] / 3 + (h * c[3]) / 4)));
     }
   }
 
@@ -48,9 +54,15 @@ export class PiecewiseCubic {
 
   /** Straight lines through the rows of a table. */
   static linear(x: readonly number[], y: readonly number[], scale = 1): PiecewiseCubic {
-    const curve = new PiecewiseCubic(Float64Array.from(x), y.map((value) => value * scale), new Float64Array(x.length), false, null);
+    const curve = new PiecewiseCubic(
+      Float64Array.from(x),
+      y.map((value) => value * scale),
+      new Float64Array(x.length),
+      false,
+      null,
+    );
     for (let i = 0; i < x.length - 1; i++)
-      curve.c.set([y[i]! * scale, ((y[i + 1]! - y[i]!) * scale) / (x[i + 1]! - x[i]!), 0, 0], 4 * i);
+      curve.c.set([y[i] * scale, ((y[i + 1] - y[i]) * scale) / (x[i + 1] - x[i]), 0, 0], 4 * i);
     return curve;
   }
 
@@ -73,13 +85,13 @@ export class PiecewiseCubic {
 
   value(x: number): number {
     const pieces = this.x.length - 1;
-    if (!(x > this.x[0]!)) return this.outside === null || x === this.x[0] ? this.first : this.outside(x);
-    if (x >= this.x[pieces]!) return this.outside === null || x === this.x[pieces] ? this.last : this.outside(x);
+    if (!(x > this.x[0])) return this.outside === null || x === this.x[0] ? this.first : this.outside(x);
+    if (x >= this.x[pieces]) return this.outside === null || x === this.x[pieces] ? this.last : this.outside(x);
     const i = this.pieceOf(x);
     const c = this.c;
-    const h = x - this.x[i]!;
+    const h = x - this.x[i];
     const k = 4 * i;
-    return c[k]! + h * (c[k + 1]! + h * (c[k + 2]! + h * c[k + 3]!));
+    return c[k] + h * (c[k + 1] + h * (c[k + 2] + h * c[k + 3]));
   }
 
   /** Integral from `a` to `b`, exact for the pieces; both inside the breaks, or held values outside them. */
@@ -89,26 +101,26 @@ export class PiecewiseCubic {
 
   private areaTo(x: number): number {
     const pieces = this.x.length - 1;
-    const low = this.x[0]!;
-    const high = this.x[pieces]!;
+    const low = this.x[0];
+    const high = this.x[pieces];
     if (x <= low) return (x - low) * this.first;
-    if (x >= high) return this.area[pieces]! + (x - high) * this.last;
+    if (x >= high) return this.area[pieces] + (x - high) * this.last;
     const i = this.pieceOf(x);
-    const h = x - this.x[i]!;
-    const [c0, c1, c2, c3] = [0, 1, 2, 3].map((k) => this.c[4 * i + k]!) as [number, number, number, number];
-    return this.area[i]! + h * (c0 + h * (c1 / 2 + h * (c2 / 3 + (h * c3) / 4)));
+    const h = x - this.x[i];
+    const [c0, c1, c2, c3] = [0, 1, 2, 3].map((k) => this.c[4 * i + k]) as [number, number, number, number];
+    return this.area[i] + h * (c0 + h * (c1 / 2 + h * (c2 / 3 + (h * c3) / 4)));
   }
 
   /** Piece that holds x, x inside the breaks. Searches from the last piece used: neighbouring calls are near. */
   private pieceOf(x: number): number {
     const breaks = this.x;
     if (this.perStep > 0) {
-      const i = ((x - breaks[0]!) * this.perStep) | 0;
+      const i = ((x - breaks[0]) * this.perStep) | 0;
       return i < breaks.length - 1 ? i : breaks.length - 2;
     }
     let i = this.hint;
-    while (x < breaks[i]!) i--;
-    while (x >= breaks[i + 1]!) i++;
+    while (x < breaks[i]) i--;
+    while (x >= breaks[i + 1]) i++;
     this.hint = i;
     return i;
   }

@@ -1,0 +1,70 @@
+import { findRoot } from '../integrate/find-root.ts';
+import { LIMIT } from './charge-current.ts';
+import { limitCodes } from './limits.ts';
+import type { SessionSolution } from './session-solution.ts';
+
+/** Something that happens inside a step; `code` is the limit that binds after it. */
+export type Happening = { t: number; kind: 'voltage-ledge' | 'cutoff' | 'hand-over'; code: number };
+
+/** How exactly moments are found [s]. */
+export const MOMENT_S = 1e-7;
+/** A voltage-ledge counts as reached this near [V] (engine/MODEL.md, section 6). */
+export const REACHED_V = 1e-9;
+
+/** Limits under which the end current ends a session. */
+const ENDING = new Set([LIMIT['cell-voltage'], LIMIT.taper, LIMIT.anode]);
+
+export const endsAtCutoff = (code: number): boolean => ENDING.has(code);
+
+/**
+ * The first thing that happens after `from` and up to `to`, if anything does.
+ *
+ * @param held     limit in force at `from` (index in `limitCodes`)
+ * @param cutoffA  the strategy's end current [A]
+ */
+export function firstHappening(
+  solution: SessionSolution,
+  held: number,
+  cutoffA: number,
+  from: number,
+  to: number,
+): Happening | null {
+  const { charge, pack, taper } = solution.system;
+  solution.look(to);
+  const code = charge.code;
+  const found: Happening[] = [];
+  const overLedge = () => pack.highestCellV(charge.current) - (taper.endV - REACHED_V);
+  const room = () => solution.allowedBy(held) - cutoffA;
+  const climbs = taper.endV < Infinity && overLedge() >= 0;
+  const spent = endsAtCutoff(held) && room() <= 0;
+  if (climbs) found.push({ kind: 'voltage-ledge', code, t: crossing(solution, overLedge, from, to) });
+  if (spent) found.push({ kind: 'cutoff', code, t: crossing(solution, () => -room(), from, to) });
+  if (code !== held) found.push(handOver(solution, held, code, from, to));
+  if (found.length === 0) return null;
+  return found.reduce((first, one) => (one.t < first.t ? one : first));
+}
+
+/** First moment at which `value`, read after a look, is no longer below 0; it is not below 0 at `to`. */
+function crossing(solution: SessionSolution, value: () => number, from: number, to: number): number {
+  const at = (t: number) => {
+    solution.look(t);
+    return value();
+  };
+  const start = at(from);
+  return start >= 0 ? from : findRoot(at, from, start, to, at(to), MOMENT_S);
+}
+
+/** Where the limit in force gives way to another: the one that binds at `to`, unless a third comes first. */
+function handOver(solution: SessionSolution, held: number, last: number, from: number, to: number): Happening {
+  const { charge } = solution.system;
+  let t = to;
+  let code = last;
+  for (let round = 0; round < limitCodes.length; round++) {
+    const other = code;
+    t = crossing(solution, () => solution.allowedBy(held) - solution.allowedBy(other), from, t);
+    solution.look(t);
+    if (charge.code === held || charge.code === other) break;
+    code = charge.code;
+  }
+  return { kind: 'hand-over', t, code };
+}

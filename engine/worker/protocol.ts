@@ -1,0 +1,30 @@
+import type { SessionResult, SessionStudyInput, StudyErrorCode, StudyIssue, ThermalAnalysis } from '../src/index.ts';
+
+/** What one session run answers: the result, the thermal network under its mean heat, and the time it took [ms]. */
+export type SessionAnswer = { result: SessionResult; thermal: ThermalAnalysis; ms: number };
+
+export type RunOptions = { everyS?: number; rtol?: number };
+
+/** An error as it crosses the worker's border. */
+export type WorkerFailure = { name: string; message: string; code?: StudyErrorCode; issues?: StudyIssue[] };
+
+export type Outcome<T> = { ok: true; value: T } | { ok: false; failure: WorkerFailure };
+
+/** Headline numbers only, for many runs at once. */
+export type RunSummary = Pick<SessionResult, 'metrics' | 'energyLedger'>;
+
+/** Series columns as they cross the border: numbers as one transferred block, the rest as they are. */
+export type PackedAnswer = { answer: SessionAnswer; names: string[]; rows: number; block: ArrayBuffer };
+
+/** What a worker offers. `onProgress` gets the share done, 0 to 1. */
+export type SessionWorker = {
+  run(
+    study: SessionStudyInput,
+    options: RunOptions,
+    onProgress: ((share: number) => void) | null,
+  ): Outcome<PackedAnswer>;
+  summarise(
+    studies: SessionStudyInput[],
+    onProgress: ((done: number) => void) | null,
+  ): Outcome<Outcome<RunSummary>[]>;
+};
