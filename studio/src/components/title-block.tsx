@@ -11,9 +11,9 @@ type Props = {
 /** The ruled cells at the head of a drawing sheet. */
 export function TitleBlock({ kind, title, cells = [], actions }: Props) {
   return (
-    <div className="block">
-      <div className="block-title">
-        <div className="block-kind">{kind}</div>
+    <div className="title-block">
+      <div className="title-block-title">
+        <div className="title-block-kind">{kind}</div>
         {typeof title === 'string' ? <h1>{title}</h1> : title}
       </div>
       {cells.length > 0 && (
@@ -26,7 +26,7 @@ export function TitleBlock({ kind, title, cells = [], actions }: Props) {
           ))}
         </dl>
       )}
-      {actions && <div className="block-actions">{actions}</div>}
+      {actions && <div className="title-block-actions">{actions}</div>}
     </div>
   );
 }

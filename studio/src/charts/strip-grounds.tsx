@@ -1,0 +1,106 @@
+import { memo } from 'react';
+import { limitFill, LimitPatterns } from './limit-marks.tsx';
+import type { PlacedSpan } from './limit-spans.ts';
+import { limitBedEdge } from './limits.ts';
+import type { StripColumns } from './strip-columns.ts';
+import type { PlacedStrip, StripLayout } from './strip-layout.ts';
+import { linePath, type Point } from './svg-path.ts';
+
+type Props = {
+  prefix: string;
+  layout: StripLayout;
+  columns: StripColumns | null;
+  xs: readonly number[];
+  spans: readonly PlacedSpan[];
+  x: (axisValue: number) => number;
+};
+
+/** What lies under Plotly's lines: hairlines, the body of the ground, and the fringe of limits under the power line. */
+export const StripGrounds = memo(function StripGrounds({ prefix, layout, columns, xs, spans, x }: Props) {
+  const power = layout.strips.find((strip) => strip.spec.key === 'power');
+  return (
+    <svg className="absolute inset-0" width={layout.width} height={layout.height} aria-hidden="true">
+      <LimitPatterns prefix={prefix} />
+      {layout.strips.map((strip) => (
+        <Hairlines key={strip.spec.key} strip={strip} layout={layout} />
+      ))}
+      {power && columns && (
+        <>
+          <clipPath id={`${prefix}ground`}>
+            <rect x={layout.left} y={power.top} width={layout.right - layout.left} height={power.height} />
+          </clipPath>
+          <g clipPath={`url(#${prefix}ground)`}>
+            <Ground strip={power} columns={columns} xs={xs} x={x} />
+            {spans.map((span) => (
+              <Fringe
+                key={span.fromRow}
+                prefix={prefix}
+                span={span}
+                strip={power}
+                columns={columns}
+                xs={xs}
+                x={x}
+                depth={layout.size === 'phone' ? 9 : 12}
+              />
+            ))}
+          </g>
+        </>
+      )}
+      {layout.strips.map((strip) => {
+        const foot = strip.top + strip.height;
+        return <line key={strip.spec.key} x1={layout.left} x2={layout.right} y1={foot} y2={foot} stroke="var(--ink)" />;
+      })}
+    </svg>
+  );
+});
+
+function Hairlines({ strip, layout }: { strip: PlacedStrip; layout: StripLayout }) {
+  return strip.tickValues
+    .filter((value) => value > strip.range[0])
+    .map((value) => (
+      <line
+        key={value}
+        x1={layout.left}
+        x2={layout.right}
+        y1={strip.y(value)}
+        y2={strip.y(value)}
+        stroke="var(--rule)"
+        strokeWidth={0.8}
+      />
+    ));
+}
+
+type CurveProps = {
+  strip: PlacedStrip;
+  columns: StripColumns;
+  xs: readonly number[];
+  x: (axisValue: number) => number;
+};
+
+function Ground({ strip, columns, xs, x }: CurveProps) {
+  const foot = strip.top + strip.height;
+  const top = columns.stationKw.map((kw, i): Point => [x(xs[i]!), strip.y(kw)]);
+  const body: Point[] = [...top, [x(xs[xs.length - 1]!), foot], [x(xs[0]!), foot]];
+  return <path d={`${linePath(body)}Z`} fill="var(--sheet)" />;
+}
+
+type FringeProps = CurveProps & { prefix: string; span: PlacedSpan; depth: number };
+
+/** The bed that hangs under the power line, in the colour and hatch of the limit that holds it. */
+function Fringe({ prefix, span, strip, columns, xs, x, depth }: FringeProps) {
+  const foot = strip.top + strip.height;
+  const last = Math.min(span.toRow + 1, xs.length - 1);
+  const upper: Point[] = [];
+  for (let row = span.fromRow; row <= last; row++) {
+    // The row after the span closes it only where both stand on the same moment and the line does not jump.
+    if (row > span.toRow && columns.stationKw[row] !== columns.stationKw[span.toRow]) break;
+    upper.push([x(xs[row]!), strip.y(columns.stationKw[row]!)]);
+  }
+  const lower = upper.map(([px, py]): Point => [px, Math.min(foot, py + depth)]).reverse();
+  return (
+    <>
+      <path d={`${linePath([...upper, ...lower])}Z`} fill={limitFill(prefix, span.code)} />
+      <path d={linePath(lower)} fill="none" stroke={limitBedEdge(span.code)} strokeWidth={0.8} />
+    </>
+  );
+}

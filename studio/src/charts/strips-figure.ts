@@ -1,0 +1,124 @@
+import type { Data, Layout } from 'plotly.js-dist-min';
+import { formatNumber } from '../lib/format.ts';
+import type { PlotlyFigure } from './plotly.ts';
+import { axisColumn, type StripAxis } from './strip-axis.ts';
+import type { StripColumns } from './strip-columns.ts';
+import type { PlacedStrip, StripLayout } from './strip-layout.ts';
+import { tickDigits } from './ticks.ts';
+
+type FigureInput = {
+  live: StripColumns;
+  baseline: StripColumns | null;
+  axis: StripAxis;
+  /** Visible part of the axis. */
+  range: readonly [number, number];
+  layout: StripLayout;
+  /** Resolves a colour token; Plotly knows no CSS variables. */
+  color: (token: string) => string;
+  /** True where a drag zooms; on touch it scrolls the page instead. */
+  zooms: boolean;
+};
+
+/** One figure with all strips over one axis: Plotly's part is scales, lines and zoom. */
+export function stripsFigure(input: FigureInput): PlotlyFigure {
+  return {
+    data: [...baselineLines(input), ...liveLines(input)],
+    layout: figureLayout(input),
+    config: { displayModeBar: false, doubleClick: false, responsive: false, showTips: false, scrollZoom: false },
+  };
+}
+
+const yName = (index: number) => (index === 0 ? 'y' : `y${index + 1}`);
+
+function liveLines({ live, axis, layout, color }: FigureInput): Data[] {
+  const x = axisColumn(live, axis);
+  return layout.strips.flatMap((strip, index) =>
+    strip.spec.lines
+      .filter((line) => !(line.wideOnly && layout.size === 'phone'))
+      .map((line) => ({
+        type: 'scatter' as const,
+        mode: 'lines' as const,
+        x,
+        y: live[line.column],
+        yaxis: yName(index),
+        line: {
+          color: color(line.ink),
+          width: line.widthPx,
+          ...(line.dash.length > 0 && { dash: line.dash.map((px) => `${px}px`).join(',') }),
+        },
+      })),
+  ) as Data[];
+}
+
+function baselineLines({ baseline, axis, layout, color }: FigureInput): Data[] {
+  if (!baseline) return [];
+  const x = axisColumn(baseline, axis);
+  return layout.strips.flatMap((strip, index) =>
+    strip.spec.lines
+      .filter((line) => line.onBaseline)
+      .map((line) => ({
+        type: 'scatter' as const,
+        mode: 'lines' as const,
+        x,
+        y: baseline[line.column],
+        yaxis: yName(index),
+        line: { color: color('--base'), width: 1.6 },
+      })),
+  );
+}
+
+function figureLayout({ layout, range, color, zooms }: FigureInput): Partial<Layout> {
+  const { width, height, left, right, plotTop, plotBottom, strips } = layout;
+  const last = Math.max(0, strips.length - 1);
+  const yAxes = strips.map((strip, index) => [`yaxis${index === 0 ? '' : index + 1}`, yAxis(strip, layout, color)]);
+  return {
+    width,
+    height,
+    margin: { l: left, r: width - right, t: plotTop, b: height - plotBottom, pad: 0 },
+    paper_bgcolor: 'rgba(0,0,0,0)',
+    plot_bgcolor: 'rgba(0,0,0,0)',
+    showlegend: false,
+    hovermode: false,
+    dragmode: zooms ? 'zoom' : false,
+    font: { family: cssFont(color('--f-num')), size: 12, color: color('--ink2') },
+    xaxis: {
+      anchor: yName(last),
+      range: [...range],
+      showgrid: false,
+      showticklabels: false,
+      showline: false,
+      zeroline: false,
+      ticks: '',
+    },
+    ...(Object.fromEntries(yAxes) as Partial<Layout>),
+  } as Partial<Layout>;
+}
+
+function yAxis(strip: PlacedStrip, { plotTop, plotBottom }: StripLayout, color: (token: string) => string) {
+  const whole = plotBottom - plotTop;
+  const from = 1 - (strip.top + strip.height - plotTop) / whole;
+  const { tickValues } = strip;
+  const digits = tickDigits((tickValues[1] ?? 0) - (tickValues[0] ?? 0));
+  return {
+    domain: [Math.max(0, from), Math.min(1, from + strip.height / whole)],
+    anchor: 'x',
+    range: strip.range,
+    fixedrange: true,
+    showgrid: false,
+    zeroline: false,
+    showline: true,
+    linecolor: color('--ink2'),
+    linewidth: 0.8,
+    tickmode: 'array',
+    tickvals: tickValues,
+    ticktext: tickValues.map((value) => formatNumber(value, digits)),
+    ticks: 'outside',
+    ticklen: 4,
+    tickwidth: 0.8,
+    tickcolor: color('--ink2'),
+    automargin: false,
+  };
+}
+
+/** Plotly reads a font list without quotes. */
+const cssFont = (family: string) => family.replaceAll("'", '').replaceAll('"', '');

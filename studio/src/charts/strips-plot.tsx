@@ -1,0 +1,73 @@
+import { useEffect, useRef } from 'react';
+import { useIsNight } from '../lib/daylight.ts';
+import { loadPlotly, type Plotly, type PlotlyElement } from './plotly.ts';
+import type { StripAxis } from './strip-axis.ts';
+import type { StripColumns } from './strip-columns.ts';
+import type { StripLayout } from './strip-layout.ts';
+import { stripsFigure } from './strips-figure.ts';
+import { tokenReader } from './tokens.ts';
+
+type Props = {
+  live: StripColumns;
+  baseline: StripColumns | null;
+  axis: StripAxis;
+  range: readonly [number, number];
+  layout: StripLayout;
+  /** The part of the axis a drag has chosen; null for all of it. */
+  onRange: (range: [number, number] | null) => void;
+  onFailed: (error: unknown) => void;
+};
+
+/** Plotly's layer: scales, lines and zoom. */
+export function StripsPlot({ live, baseline, axis, range, layout, onRange, onFailed }: Props) {
+  const ref = useRef<HTMLDivElement>(null);
+  const plotly = useRef<Plotly | null>(null);
+  const isNight = useIsNight();
+
+  // Speaks to Plotly: draws what changed, at most once per frame, and hears zoom and pan back.
+  useEffect(() => {
+    const element = ref.current as PlotlyElement | null;
+    if (!element) return;
+    let stopped = false;
+    const draw = async () => {
+      plotly.current ??= await loadPlotly();
+      if (stopped) return;
+      const zooms = window.matchMedia('(pointer: fine)').matches;
+      const {
+        data,
+        layout: figure,
+        config,
+      } = stripsFigure({ live, baseline, axis, range, layout, color: tokenReader(), zooms });
+      await plotly.current.react(element, data, figure, config);
+      listen(element, onRange);
+    };
+    const frame = requestAnimationFrame(() => void draw().catch(onFailed));
+    return () => {
+      stopped = true;
+      cancelAnimationFrame(frame);
+    };
+  }, [live, baseline, axis, range, layout, isNight, onRange, onFailed]);
+
+  // Speaks to Plotly: gives back what it holds when the strips leave the page.
+  useEffect(() => {
+    const element = ref.current;
+    return () => {
+      if (element) plotly.current?.purge(element);
+    };
+  }, []);
+
+  return <div ref={ref} className="strips-plot absolute inset-0" />;
+}
+
+function listen(element: PlotlyElement, onRange: Props['onRange']): void {
+  const onChange = (change: Record<string, unknown>) => {
+    const from = change['xaxis.range[0]'];
+    const to = change['xaxis.range[1]'];
+    if (typeof from === 'number' && typeof to === 'number') onRange([from, to]);
+  };
+  for (const event of ['plotly_relayout', 'plotly_relayouting', 'plotly_doubleclick'])
+    element.removeAllListeners?.(event);
+  element.on?.('plotly_relayout', onChange);
+  element.on?.('plotly_relayouting', onChange);
+  element.on?.('plotly_doubleclick', () => onRange(null));
+}
