@@ -8,8 +8,8 @@ import {
 } from '../station/link.ts';
 import type { TaperTable } from '../strategy/taper-table.ts';
 import type { Boost, Inlet, Pack, Station, Strategy } from '../study/schema.ts';
-import { PiecewiseCubic } from '../table/piecewise-cubic.ts';
 import { limitCodes } from './limits.ts';
+import { PackLimits } from './pack-limits.ts';
 
 /** Index of each limit in `limitCodes`, for the hot path. */
 export const LIMIT = Object.fromEntries(limitCodes.map((code, i) => [code, i])) as Record<
@@ -28,8 +28,6 @@ const TAPER = LIMIT['taper'];
 const ANODE = LIMIT['anode'];
 const HOT = LIMIT['hot'];
 const COLD = LIMIT['cold'];
-
-const atLeastZero = (value: number) => (value > 0 ? value : 0);
 
 export type ChargeParts = { pack: Pack; inlet: Inlet; station: Station; strategy: Strategy; boost: Boost | undefined };
 
@@ -60,10 +58,7 @@ export class ChargeCurrent {
   private readonly inletMaxA: number;
   private readonly inletFromC: number;
   private readonly inletToC: number;
-  private readonly packMaxA: number;
-  private readonly hotFromC: number;
-  private readonly hotToC: number;
-  private readonly cold: PiecewiseCubic | null;
+  private readonly limits: PackLimits;
   private readonly boostW: number;
   private readonly efficiency: number;
 
@@ -79,12 +74,7 @@ export class ChargeCurrent {
     this.inletMaxA = inlet.currentMaxA ?? Infinity;
     this.inletFromC = inlet.derateFromC;
     this.inletToC = inlet.derateToC;
-    this.packMaxA = pack.chargeCurrentMaxA;
-    this.hotFromC = strategy.hotDerate.fromC;
-    this.hotToC = strategy.hotDerate.toC;
-    this.cold = strategy.coldLimit
-      ? PiecewiseCubic.linear(strategy.coldLimit.tempC, strategy.coldLimit.cRate, system.capacityAh)
-      : null;
+    this.limits = new PackLimits({ pack, strategy }, system);
     this.boosted = boosted;
     this.boostW = (boost?.powerMaxKw ?? 0) * 1000;
     this.efficiency = boost?.efficiency ?? 1;
@@ -93,9 +83,10 @@ export class ChargeCurrent {
   /** Sets current, station current and binding limit, `seconds` after plug-in; `inletC` is the inlet's temperature [°C]. */
   decide(seconds: number, inletC: number): void {
     const system = this.system;
-    let I = this.packMaxA;
+    const limits = this.limits;
+    let I = limits.packMaxA;
     let code = PACK_CURRENT;
-    const ceiling = atLeastZero(system.ceilingCurrent);
+    const ceiling = limits.ceiling();
     if (ceiling < I) {
       I = ceiling;
       code = CELL_VOLTAGE;
@@ -105,24 +96,20 @@ export class ChargeCurrent {
       I = taper;
       code = TAPER;
     }
-    const anode = atLeastZero(system.anodeCurrent);
+    const anode = limits.anode();
     if (anode < I) {
       I = anode;
       code = ANODE;
     }
-    if (system.hottestSurface > this.hotFromC) {
-      const hot = this.hotCurrent();
-      if (hot < I) {
-        I = hot;
-        code = HOT;
-      }
+    const hot = limits.hot();
+    if (hot < I) {
+      I = hot;
+      code = HOT;
     }
-    if (this.cold !== null) {
-      const cold = this.cold.value(system.coldestSurface);
-      if (cold < I) {
-        I = cold;
-        code = COLD;
-      }
+    const cold = limits.cold();
+    if (cold < I) {
+      I = cold;
+      code = COLD;
     }
     // Station-side limits on I_d; of equal limits the station's are listed first.
     let Id = this.stationSide(I);
@@ -189,17 +176,17 @@ export class ChargeCurrent {
       case INLET:
         return this.inletMaxA === Infinity ? Infinity : this.packSide(this.inletCurrent(inletC));
       case PACK_CURRENT:
-        return this.packMaxA;
+        return this.limits.packMaxA;
       case CELL_VOLTAGE:
-        return atLeastZero(system.ceilingCurrent);
+        return this.limits.ceiling();
       case TAPER:
         return this.taperCurrent();
       case ANODE:
-        return atLeastZero(system.anodeCurrent);
+        return this.limits.anode();
       case HOT:
-        return this.hotCurrent();
+        return this.limits.hot();
       case COLD:
-        return this.cold === null ? Infinity : this.cold.value(system.coldestSurface);
+        return this.limits.cold();
       default:
         return Infinity;
     }
@@ -219,11 +206,6 @@ export class ChargeCurrent {
     const { soc, coldestSurface, restV, ohm } = this.system;
     const value = this.taper.value(soc, coldestSurface) * this.taperFactor;
     return this.taper.unit === 'kW' ? currentForPower(restV, ohm, value) : value;
-  }
-
-  private hotCurrent(): number {
-    const room = (this.hotToC - this.system.hottestSurface) / (this.hotToC - this.hotFromC);
-    return this.packMaxA * (room < 0 ? 0 : room > 1 ? 1 : room);
   }
 
   private inletCurrent(inletC: number): number {
