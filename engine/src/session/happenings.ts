@@ -1,7 +1,10 @@
 import { findRoot } from '../integrate/find-root.ts';
 import { LIMIT } from './charge-current.ts';
 import { limitCodes } from './limits.ts';
-import type { SessionSolution } from './session-solution.ts';
+import type { Solution } from '../integrate/solution.ts';
+import type { SessionSystem } from './session-system.ts';
+
+export type SessionSolution = Solution<SessionSystem>;
 
 /** Something that happens inside a step; `code` is the limit that binds after it. */
 export type Happening = { t: number; kind: 'voltage-ledge' | 'cutoff' | 'hand-over'; code: number };
@@ -34,7 +37,7 @@ export function firstHappening(
   const code = charge.code;
   const found: Happening[] = [];
   const overLedge = () => pack.highestCellV(charge.current) - (taper.endV - REACHED_V);
-  const room = () => solution.allowedBy(held) - cutoffA;
+  const room = () => allowedBy(solution, held) - cutoffA;
   const climbs = taper.endV < Infinity && overLedge() >= 0;
   const spent = endsAtCutoff(held) && room() <= 0;
   if (climbs) found.push({ kind: 'voltage-ledge', code, t: crossing(solution, overLedge, from, to) });
@@ -44,8 +47,13 @@ export function firstHappening(
   return found.reduce((first, one) => (one.t < first.t ? one : first));
 }
 
+/** Current that one limit allows at the moment last looked at [A]. */
+export function allowedBy({ system, at, seen }: SessionSolution, code: number): number {
+  return system.charge.allowedBy(code, at, seen[system.pack.layout.inlet]);
+}
+
 /** First moment at which `value`, read after a look, is no longer below 0; it is not below 0 at `to`. */
-function crossing(solution: SessionSolution, value: () => number, from: number, to: number): number {
+export function crossing(solution: { look(t: number): void }, value: () => number, from: number, to: number): number {
   const at = (t: number) => {
     solution.look(t);
     return value();
@@ -61,7 +69,7 @@ function handOver(solution: SessionSolution, held: number, last: number, from: n
   let code = last;
   for (let round = 0; round < limitCodes.length; round++) {
     const other = code;
-    t = crossing(solution, () => solution.allowedBy(held) - solution.allowedBy(other), from, t);
+    t = crossing(solution, () => allowedBy(solution, held) - allowedBy(solution, other), from, t);
     solution.look(t);
     if (charge.code === held || charge.code === other) break;
     code = charge.code;

@@ -4,7 +4,7 @@ import type { Session } from '../study/schema.ts';
 import { Extreme } from './extreme.ts';
 import { limitCodes, type LimitCode } from './limits.ts';
 import type { EndReason, MinuteMark, SessionMetrics, SocMark } from './result.ts';
-import type { SessionSolution } from './session-solution.ts';
+import type { SessionSolution } from './happenings.ts';
 
 const SOC_MARKS = ['10', '20', '30', '40', '50', '60', '70', '80', '90', '100'] as const;
 const MINUTE_MARKS = ['10', '15', '20', '30'] as const;

@@ -52,29 +52,6 @@ export class SessionSystem {
     const sum = dy[integrals + 9] + dy[integrals + 12] + pack.coolant.outC + y[inlet] + stationCurrent;
     if (!(sum - sum === 0)) throw new NotFinite();
   };
-
-  /** Shortest time constant of the states [s] and what has it: the integrator must stay within a few of them. */
-  fastest(): { seconds: number; name: string } {
-    const { pack } = this;
-    const { coolant } = pack;
-    const candidates: { seconds: number; name: string }[] = [];
-    pack.tau.forEach((seconds, k) => candidates.push({ seconds, name: `RC pair ${k + 1} (cell.rcPairs[${k}].tauS)` }));
-    const outward = coolant.wallConductance + pack.surfaceToAir;
-    const name = 'the surface node’s heat capacity against its conductances (thermal)';
-    if (pack.layout.twoNode) {
-      candidates.push({ seconds: pack.surfaceJPerK / (pack.coreToSurface + outward), name });
-      candidates.push({
-        seconds: pack.coreJPerK / pack.coreToSurface,
-        name: 'the core node’s heat capacity (thermal)',
-      });
-    } else candidates.push({ seconds: pack.coreJPerK / (outward || 1e-9), name });
-    if (coolant.flowWPerK > 0)
-      candidates.push({
-        seconds: coolant.loopJPerK / coolant.flowWPerK,
-        name: 'the coolant loop’s volume against its flow (thermal.coolant)',
-      });
-    return candidates.reduce((a, b) => (b.seconds < a.seconds ? b : a), { seconds: 1e9, name: 'none' });
-  }
 }
 
 /** The error for a run that leaves the numbers' range however short its steps. */

@@ -1,25 +1,30 @@
 import { findRoot } from '../integrate/find-root.ts';
-import { Stepper, type Step } from '../integrate/stepper.ts';
+import { Solution } from '../integrate/solution.ts';
+import type { Stepper} from '../integrate/stepper.ts';
+import { type Step } from '../integrate/stepper.ts';
 import type { SessionStudy } from '../study/schema.ts';
-import { endsAtCutoff, firstHappening, MOMENT_S, REACHED_V, type Happening } from './happenings.ts';
+import {
+  allowedBy,
+  endsAtCutoff,
+  firstHappening,
+  MOMENT_S,
+  REACHED_V,
+  type Happening,
+  type SessionSolution,
+} from './happenings.ts';
 import { energyLedger, thermalLedger } from './ledgers.ts';
 import { limitCodes } from './limits.ts';
 import { SessionMarks } from './session-marks.ts';
 import type { EndReason, RunEvent, SessionResult } from './result.ts';
 import { SeriesRecorder } from './series-recorder.ts';
-import { SessionSolution } from './session-solution.ts';
 import { inconsistent, NotFinite, SessionSystem } from './session-system.ts';
-import { tolerances } from './tolerances.ts';
+import { makeStepper, type Accuracy } from './make-stepper.ts';
 
-export type SessionOptions = {
+export type SessionOptions = Accuracy & {
   /** Output grid [s]. */
   everyS?: number;
-  /** Relative tolerance of the integration. */
-  rtol?: number;
   /** Called now and then with the share done, 0 to 1. */
   onProgress?: (share: number) => void;
-  /** Most evaluations of the derivative before the run gives up. */
-  maxEvaluations?: number;
   /** Stop the integration where one limit hands over to another (default), or let steps run across. */
   stopAtSwitchOvers?: boolean;
 };
@@ -34,12 +39,7 @@ export type SessionRun = {
 };
 
 export const DEFAULT_EVERY_S = 10;
-export const DEFAULT_RTOL = 5e-6;
-const MAX_EVALUATIONS = 2_000_000;
 const MAX_HAND_OVERS = 10_000;
-/** Longest step as a multiple of the shortest time constant, and the first step after a start [s]: measured, see the bench. */
-const STABLE_STEPS = 3;
-const FIRST_STEP_S = 2;
 /** A ledge is left downwards only this far below its edge, so that the dip at plug-in does not rattle on one [soc]. */
 const LEDGE_LEFT_SOC = 1e-6;
 /** Longest gap between two looks at the solution [s], whatever the output grid. */
@@ -84,8 +84,8 @@ class SessionSimulation {
     private readonly options: SessionOptions,
   ) {
     this.system = new SessionSystem(study);
-    this.solution = new SessionSolution(this.system);
-    this.stepper = this.makeStepper();
+    this.solution = new Solution(this.system, this.system.start, this.system.pack.layout.integrals);
+    this.stepper = makeStepper(this.system.derivative, this.system.pack, options);
     this.recorder = new SeriesRecorder(this.system.pack, this.system.charge);
     this.marks = new SessionMarks(study.session.startSoc, this.solution);
     this.y = this.system.start;
@@ -102,17 +102,6 @@ class SessionSimulation {
     this.plugIn();
     while (this.ended === null) this.integrate();
     return this.finish();
-  }
-
-  private makeStepper(): Stepper {
-    const fastest = this.system.fastest();
-    return new Stepper(this.system.derivative, {
-      ...tolerances(this.system.pack, this.options.rtol ?? DEFAULT_RTOL),
-      maxStepS: STABLE_STEPS * fastest.seconds,
-      firstStepS: Math.min(FIRST_STEP_S, fastest.seconds),
-      maxEvaluations: this.options.maxEvaluations ?? MAX_EVALUATIONS,
-      diagnose: () => `the shortest time constant is ${fastest.seconds.toPrecision(3)} s, of ${fastest.name}`,
-    });
   }
 
   private plugIn(): void {
@@ -219,7 +208,7 @@ class SessionSimulation {
       this.row(code);
       if (t === this.nextRowS) this.nextRowS = this.rowAfter(t);
       this.changeCode(t, code);
-      const spent = endsAtCutoff(code) && this.solution.allowedBy(code) <= this.study.strategy.cutoffA;
+      const spent = endsAtCutoff(code) && allowedBy(this.solution, code) <= this.study.strategy.cutoffA;
       if (!spent && this.options.stopAtSwitchOvers === false) return false;
       this.stopAt(t);
       if (spent) this.end('cutoff');

@@ -1,8 +1,10 @@
-import type { Step } from '../integrate/stepper.ts';
-import type { SessionSystem } from './session-system.ts';
+import type { Step } from './stepper.ts';
 
-/** The solution of a session as far as it is known: any moment of the step under way, or the one before it, can be looked at. */
-export class SessionSolution {
+/** A system that shows itself at a moment, given the states there. */
+type Shown = { at(t: number, y: ArrayLike<number>): void };
+
+/** The solution as far as it is known: any moment of the step under way, or the one before it, can be looked at. */
+export class Solution<System extends Shown> {
   /** Physical states at the moment last looked at. */
   readonly seen: number[];
   /** That moment [s]; NaN where the system shows none. */
@@ -11,8 +13,16 @@ export class SessionSolution {
   private step: Step | null = null;
   private before: Step | null = null;
 
-  constructor(readonly system: SessionSystem) {
-    this.seen = system.start.slice(0, system.pack.layout.integrals);
+  /**
+   * @param start     whole state at the start
+   * @param physical  how many of its first entries are physical states; the rest are integrals, which are not looked at
+   */
+  constructor(
+    readonly system: System,
+    start: readonly number[],
+    physical: number,
+  ) {
+    this.seen = start.slice(0, physical);
   }
 
   /** Takes the next step in; the system no longer shows a moment, since the integrator has used it. */
@@ -22,7 +32,7 @@ export class SessionSolution {
     this.at = Number.NaN;
   }
 
-  /** Observes the solution at a moment and decides the current there by all limits. */
+  /** Makes the system show the solution at a moment. */
   look(t: number): void {
     if (t === this.at) return;
     const { step, before, seen } = this;
@@ -31,16 +41,11 @@ export class SessionSolution {
     this.decide(t);
   }
 
-  /** Decides the current again for the state last looked at, after something has changed. */
+  /** Makes the system show the state last looked at again, after something has changed. */
   decide(t: number): void {
     this.looks++;
     this.at = t;
     this.system.at(t, this.seen);
-  }
-
-  /** Current that one limit allows at the moment last looked at [A]. */
-  allowedBy(code: number): number {
-    return this.system.charge.allowedBy(code, this.at, this.seen[this.system.pack.layout.inlet]);
   }
 
   /** The whole state, ledger integrals too, at a moment of the step under way. */
