@@ -35,6 +35,9 @@ export function quantityPathOf(path: string): QuantityPath | undefined {
   return key in quantities ? (key as QuantityPath) : undefined;
 }
 
+/** Least decimals where the trade has a custom; elsewhere the step decides. */
+const CUSTOMARY: Record<string, number> = { A: 0, mV: 0, kW: 0, W: 0, min: 0, V: 0 };
+
 /** How one of the engine's quantities is shown. */
 export function measureOf(path: QuantityPath): Measure {
   const { unit, usual, integer }: Quantity = quantities[path];
@@ -43,7 +46,7 @@ export function measureOf(path: QuantityPath): Measure {
   const step = integer ? 1 : niceStep((high - low) / 50);
   if (unit === '°C') return { unit, scale: 'temperature', decimals: 1, step };
   if (CELL_VOLTAGES.has(path)) return { unit, scale: 'plain', decimals: 3, step: 0.005 };
-  return { unit, scale: 'plain', decimals: Math.max(0, -Math.floor(Math.log10(step))), step };
+  return { unit, scale: 'plain', decimals: CUSTOMARY[unit] ?? Math.max(0, -Math.floor(Math.log10(step))), step };
 }
 
 /** The nearest of 1, 2 and 5 times a power of ten that is not above the value. */

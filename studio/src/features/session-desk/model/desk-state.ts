@@ -19,7 +19,7 @@ export type DeskState = {
 };
 
 export type DeskAction =
-  | { type: 'entry'; path: string; entry: Entry; label: string }
+  | { type: 'entry'; path: string; entry: Entry; label: string; typingAt?: string }
   | { type: 'parts'; parts: Part[]; label: string; typingAt?: string }
   | { type: 'open'; study: SessionStudyInput; label: string }
   | { type: 'keep-baseline' }
@@ -49,13 +49,12 @@ export function freshDesk(study: SessionStudyInput): DeskState {
 export function deskReducer(state: DeskState, action: DeskAction): DeskState {
   const { sheet } = state;
   switch (action.type) {
-    case 'entry':
-      return changed(
-        state,
-        { ...sheet, draft: withEntry(sheet.draft, action.path, action.entry) },
-        action.label,
-        action.path,
-      );
+    case 'entry': {
+      const draft = withEntry(sheet.draft, action.path, action.entry);
+      // A whole table is typed in cell by cell; a row added or moved is a step of its own.
+      const typingAt = action.typingAt ?? (Array.isArray(action.entry) ? undefined : action.path);
+      return changed(state, { ...sheet, draft }, action.label, typingAt);
+    }
     case 'parts':
       return changed(state, { ...sheet, draft: withParts(sheet.draft, action.parts) }, action.label, action.typingAt);
     case 'open':

@@ -51,5 +51,6 @@ function bySoc(socs: number[]): RowFinder {
 
 function ledgeAt(events: SessionResult['events'], tS: number): number {
   const last = events.findLast((event) => event.event.startsWith('ledge:') && event.tS <= tS);
-  return last ? Number(last.event.slice('ledge:'.length)) : 0;
+  // Events count ledges from 1.
+  return last ? Number(last.event.slice('ledge:'.length)) - 1 : 0;
 }

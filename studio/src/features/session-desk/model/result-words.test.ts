@@ -61,7 +61,7 @@ test('ledgeMinutes gives each ledge the time it held', () => {
 
 test('ledgeMinutes follows the ledge events of voltage ledges', () => {
   const steps = [{ untilCellV: 4, value: 300 }, { value: 200 }];
-  const moved = { ...result, events: [{ tS: 1800, event: 'ledge:1' }] };
+  const moved = { ...result, events: [{ tS: 1800, event: 'ledge:2' }] };
   expect(ledgeMinutes(moved, { shape: 'voltage-ledges', unit: 'A', steps })).toEqual([20, 5]);
 });
 

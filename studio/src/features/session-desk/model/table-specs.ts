@@ -1,7 +1,6 @@
 import type { QuantityPath } from '@voltiplano/engine';
 import type { Cell, Grid } from '../../../components/fields/grid.ts';
 import { measureOf, type Measure } from '../../../components/fields/measure.ts';
-import { parsePath } from './study-path.ts';
 
 export type Column = {
   label: string;
@@ -222,8 +221,6 @@ export function cellOfPath(spec: TableSpec, grid: Grid, path: string): { row: nu
     for (let column = 0; column < grid[row]!.length; column++)
       if (path === spec.cellPath(row, column)) return { row, column };
   // A row as a whole, such as `steps[2]`, is named at its first cell.
-  const steps = parsePath(path);
-  const last = steps[steps.length - 1];
-  const inRow = typeof last === 'number' && last < grid.length && spec.cellPath(last, 0).startsWith(path);
-  return inRow ? { row: last, column: 0 } : undefined;
+  const row = grid.findIndex((_, i) => spec.cellPath(i, 0).startsWith(`${path}.`) && path !== spec.path);
+  return row < 0 || !path.endsWith(']') ? undefined : { row, column: 0 };
 }

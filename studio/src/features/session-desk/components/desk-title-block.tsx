@@ -1,0 +1,61 @@
+import type { ReactNode } from 'react';
+import { TitleBlock } from '../../../components/title-block.tsx';
+import { useDesk, useDispatch } from '../hooks/use-desk.ts';
+import { changesOf } from '../model/derived.ts';
+
+type Props = { kept: string; actions: ReactNode };
+
+/** Title, baseline, how much has changed against it, and whether it is kept. */
+export function DeskTitleBlock({ kept, actions }: Props) {
+  const baseline = useDesk(({ sheet }) => sheet.baseline);
+  const changed = useDesk(({ sheet }) => changesOf(sheet).length);
+  const cells = [
+    { label: 'Baseline', value: <BaselineCell title={baseline && (baseline.title || 'untitled')} /> },
+    { label: 'Changed', value: baseline ? `${changed} ${changed === 1 ? 'input' : 'inputs'}` : 'no baseline' },
+    { label: 'Kept', value: <span role="status">{kept}</span> },
+  ];
+  return <TitleBlock kind="Session study" title={<TitleField />} cells={cells} actions={actions} />;
+}
+
+function TitleField() {
+  const dispatch = useDispatch();
+  const title = useDesk(({ sheet }) => sheet.draft.study.title ?? '');
+  return (
+    <>
+      <h1 className="unseen">{title || 'Untitled session'}</h1>
+      <input
+        className="desk-title"
+        aria-label="Title"
+        value={title}
+        placeholder="Untitled session"
+        maxLength={300}
+        spellCheck={false}
+        onChange={(event) =>
+          dispatch({
+            type: 'parts',
+            parts: [{ path: 'title', value: event.target.value || undefined }],
+            label: 'title',
+            typingAt: 'title',
+          })
+        }
+        onBlur={() => dispatch({ type: 'leave-field' })}
+      />
+    </>
+  );
+}
+
+function BaselineCell({ title }: { title: string | null }) {
+  const dispatch = useDispatch();
+  if (title === null) return 'none';
+  return (
+    <span className="baseline-cell">
+      <span className="baseline-title">{title}</span>
+      <button type="button" className="lnk" onClick={() => dispatch({ type: 'swap-baseline' })}>
+        Swap
+      </button>
+      <button type="button" className="lnk" onClick={() => dispatch({ type: 'clear-baseline' })}>
+        Clear
+      </button>
+    </span>
+  );
+}

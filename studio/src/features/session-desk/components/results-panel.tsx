@@ -1,0 +1,49 @@
+import type { RefObject } from 'react';
+import { LedgerFlow } from '../../../charts/ledger-flow.tsx';
+import { Caution } from '../../../components/caution.tsx';
+import { HeadlineNumbers } from '../../../components/headline-numbers.tsx';
+import { useUnits } from '../../../lib/units.ts';
+import { useRun } from '../hooks/run-context.ts';
+import { sessionHeadlines } from '../model/session-headlines.ts';
+import { HeatSection } from './heat-section.tsx';
+import { RunNotices } from './run-notices.tsx';
+import { SessionSentence } from './session-sentence.tsx';
+import { StripsSection } from './strips-section.tsx';
+
+type Props = { drawing: RefObject<HTMLDivElement | null> };
+
+/** Sentence, numbers, strips, ledger, heat: what the session does, in words first. */
+export function ResultsPanel({ drawing }: Props) {
+  const { answer, study, baseline } = useRun();
+  const units = useUnits();
+  return (
+    <section className="res" aria-label="Results">
+      <RunNotices />
+      {answer && study ? (
+        <>
+          <div className="res-head">
+            <SessionSentence result={answer.result} />
+            <HeadlineNumbers numbers={sessionHeadlines(answer.result, study, units, baseline?.result ?? null)} />
+          </div>
+          <StripsSection answer={answer} study={study} drawing={drawing} />
+          <section aria-labelledby="ledger-title">
+            <div className="bar">
+              <h2 id="ledger-title">Ledger</h2>
+              <span className="about">
+                energy from the grid to the cells; each loss is one ledge, heights to scale above the break
+              </span>
+            </div>
+            <LedgerFlow ledger={answer.result.energyLedger} />
+          </section>
+          <HeatSection thermal={answer.thermal} />
+        </>
+      ) : (
+        <p className="say waiting">Running the session.</p>
+      )}
+      <div className="res-foot">
+        <p className="caution">The hot limit reads surfaces, so cores may pass its upper end.</p>
+        <Caution invented />
+      </div>
+    </section>
+  );
+}

@@ -1,0 +1,87 @@
+import { useEffect, useMemo, useRef, useState, type RefObject } from 'react';
+import { DeskContext, useDesk } from '../hooks/use-desk.ts';
+import type { LoadedDesk } from '../hooks/load-desk.ts';
+import { RunContext } from '../hooks/run-context.ts';
+import { useDeskShortcuts } from '../hooks/use-desk-shortcuts.ts';
+import { useKeptDesk } from '../hooks/use-kept-desk.ts';
+import { useSessionRun } from '../hooks/use-session-run.ts';
+import { useStudyFiles } from '../hooks/use-study-files.ts';
+import { DeskActions } from './desk-actions.tsx';
+import { DeskTitleBlock } from './desk-title-block.tsx';
+import { InputsPanel } from './inputs-panel.tsx';
+import { OpenReportDialog } from './open-report-dialog.tsx';
+import { ResultsPanel } from './results-panel.tsx';
+import { ShortcutsDialog } from './shortcuts-dialog.tsx';
+
+/** One desk with its study, its results and its files. */
+export function SessionDesk({ store, report }: LoadedDesk) {
+  return (
+    <DeskContext value={store}>
+      <Desk store={store} report={report} />
+    </DeskContext>
+  );
+}
+
+function Desk({ store, report }: LoadedDesk) {
+  const study = useDesk(({ sheet }) => sheet.draft.study);
+  const baseline = useDesk(({ sheet }) => sheet.baseline);
+  const run = useSessionRun(study, baseline);
+  const files = useStudyFiles(store, report);
+  const kept = useKeptDesk(store);
+  const picker = useRef<HTMLInputElement>(null);
+  const drawing = useRef<HTMLDivElement>(null);
+  const [showsKeys, setShowsKeys] = useState(false);
+  const { save } = files;
+  const commands = useMemo(
+    () => ({ save, open: () => picker.current?.click(), showShortcuts: () => setShowsKeys(true) }),
+    [save],
+  );
+  useDeskShortcuts(store, commands);
+  useLinksInTheAddress(files.openLink);
+  return (
+    <RunContext value={run}>
+      <DeskTitleBlock
+        kept={kept}
+        actions={<DeskActions files={files} picker={picker} drawing={drawing} onShowKeys={() => setShowsKeys(true)} />}
+      />
+      <DeskSides drawing={drawing} />
+      <ShortcutsDialog open={showsKeys} onOpenChange={setShowsKeys} />
+      <OpenReportDialog report={files.report} onClose={files.forgetReport} />
+    </RunContext>
+  );
+}
+
+const SIDES = [
+  { side: 'results', label: 'Results' },
+  { side: 'inputs', label: 'Inputs' },
+] as const;
+
+/** Inputs and results, beside each other or, on a telephone, one at a time. */
+function DeskSides({ drawing }: { drawing: RefObject<HTMLDivElement | null> }) {
+  const [side, setSide] = useState<'results' | 'inputs'>('results');
+  return (
+    <>
+      <div className="phone-switch pick" role="group" aria-label="Part of the desk">
+        {SIDES.map((one) => (
+          <button key={one.side} type="button" aria-pressed={side === one.side} onClick={() => setSide(one.side)}>
+            {one.label}
+          </button>
+        ))}
+      </div>
+      <div className={`desk show-${side}`}>
+        <InputsPanel />
+        <ResultsPanel drawing={drawing} />
+      </div>
+    </>
+  );
+}
+
+/** A link pasted into the address of an open desk is opened too. */
+function useLinksInTheAddress(openLink: () => Promise<void>): void {
+  // Speaks to the page's address.
+  useEffect(() => {
+    const open = () => void openLink();
+    window.addEventListener('hashchange', open);
+    return () => window.removeEventListener('hashchange', open);
+  }, [openLink]);
+}

@@ -1,0 +1,54 @@
+import type { StudyIssue } from '@voltiplano/engine';
+import type { Grid } from '../../../components/fields/grid.ts';
+import type { CellIssue } from '../../../components/fields/table-editor.tsx';
+import type { TemperatureUnit } from '../../../lib/units.ts';
+import { issuesOf } from '../model/derived.ts';
+import { gridAt } from '../model/draft.ts';
+import { issueSentence } from '../model/issue-text.ts';
+import { isWithin, valueAt } from '../model/study-path.ts';
+import { cellMeasure, cellOfPath, tableAt, type TableSpec } from '../model/table-specs.ts';
+import { useDesk, useDispatch } from './use-desk.ts';
+
+/** Everything the editor of one table shows; undefined where no such table is in the study. */
+export function useStudyTable(path: string, temperature: TemperatureUnit) {
+  const dispatch = useDispatch();
+  const { draft, baseline } = useDesk((state) => state.sheet);
+  const spec = tableAt(path, draft.study.strategy.taper);
+  if (!spec) return undefined;
+  const grid = gridAt(draft, path);
+  const before = baseline && isSameKind(draft.study, baseline, path) ? spec.toGrid(valueAt(baseline, path)) : null;
+  const found = issuesOf(draft).filter((issue) => isWithin(issue.path, path));
+  const { issues, general } = placed(found, spec, grid, temperature);
+  return {
+    spec,
+    grid,
+    issues,
+    general,
+    meanwhile: path in draft.pending ? 'The curves still use the last good table.' : undefined,
+    isMoved: (row: number, column: number) => before !== null && grid[row]?.[column] !== before[row]?.[column],
+    onGrid: (next: Grid, label: string, typingAt?: string) =>
+      dispatch({ type: 'entry', path, entry: next, label, ...(typingAt ? { typingAt: `${path} ${typingAt}` } : {}) }),
+    onLeave: () => dispatch({ type: 'leave-field' }),
+  };
+}
+
+/** A table is compared with the baseline's only where both hold the same kind of numbers. */
+function isSameKind(study: object, baseline: object, path: string): boolean {
+  if (!path.startsWith('strategy.taper')) return true;
+  const kind = (one: object) => [valueAt(one, 'strategy.taper.shape'), valueAt(one, 'strategy.taper.unit')].join(' ');
+  return kind(study) === kind(baseline);
+}
+
+/** Sorts issues into those of a cell and those of the table as a whole. */
+function placed(found: StudyIssue[], spec: TableSpec, grid: Grid, temperature: TemperatureUnit) {
+  const issues: CellIssue[] = [];
+  const general: string[] = [];
+  for (const issue of found) {
+    const cell = cellOfPath(spec, grid, issue.path);
+    const measure = cell && cellMeasure(spec, cell.row, cell.column);
+    const sentence = issueSentence(issue, measure, temperature);
+    if (cell) issues.push({ ...cell, sentence });
+    else general.push(sentence);
+  }
+  return { issues, general };
+}
