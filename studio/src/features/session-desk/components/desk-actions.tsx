@@ -5,17 +5,18 @@ import { useDispatch } from '../hooks/use-desk.ts';
 import type { StudyFiles } from '../hooks/use-study-files.ts';
 import { examples } from '../model/examples.ts';
 import { ExportMenu } from './export-menu.tsx';
+import type { Drawings } from './results-panel.tsx';
 
 type Props = {
   files: StudyFiles;
   /** The file input, so that a key can open it too. */
   picker: RefObject<HTMLInputElement | null>;
-  drawing: RefObject<HTMLDivElement | null>;
+  drawings: Drawings;
   onShowKeys: () => void;
 };
 
 /** Examples, files, export, and the one next step: keep what is there as baseline. */
-export function DeskActions({ files, picker, drawing, onShowKeys }: Props) {
+export function DeskActions({ files, picker, drawings, onShowKeys }: Props) {
   const dispatch = useDispatch();
   return (
     <>
@@ -30,7 +31,7 @@ export function DeskActions({ files, picker, drawing, onShowKeys }: Props) {
         ))}
       </Menu>
       <StudyMenu files={files} onOpen={() => picker.current?.click()} onShowKeys={onShowKeys} />
-      <ExportMenu drawing={drawing} />
+      <ExportMenu drawings={drawings} />
       <Button go onClick={() => dispatch({ type: 'keep-baseline' })}>
         Keep as baseline
       </Button>

@@ -1,19 +1,53 @@
-import type { RefObject } from 'react';
+import { useState } from 'react';
+import { exportDrawing, type ExportFormat } from '../../../charts/chart-export.ts';
 import { Button } from '../../../components/button.tsx';
-import { Menu, MenuItem } from '../../../components/menu.tsx';
+import { Menu, MenuHeading, MenuItem } from '../../../components/menu.tsx';
 import { useRun } from '../hooks/run-context.ts';
 import { downloadText } from '../hooks/use-study-files.ts';
 import { resultFile, seriesFile } from '../model/export-files.ts';
+import type { Drawings } from './results-panel.tsx';
 
-type Props = { drawing: RefObject<HTMLDivElement | null> };
+const FORMATS: ExportFormat[] = ['svg', 'png'];
+const PARTS = ['strips', 'ledger'] as const;
 
-export function ExportMenu({ drawing: _drawing }: Props) {
+/** The results as tables and drawings. */
+export function ExportMenu({ drawings }: { drawings: Drawings }) {
   const { answer, study } = useRun();
+  const [failed, setFailed] = useState(false);
   if (!answer || !study) return <Button unavailable="No result yet">Export</Button>;
+  const draw = async (part: (typeof PARTS)[number], format: ExportFormat) => {
+    const element = drawings[part].current;
+    if (!element) return;
+    setFailed(false);
+    await exportDrawing(element, { title: study.title ?? 'Session', part, format }).catch(() => setFailed(true));
+  };
   return (
-    <Menu trigger={<Button>Export</Button>} align="end">
-      <MenuItem onSelect={() => downloadText(seriesFile(answer.result, study))}>Series as CSV</MenuItem>
-      <MenuItem onSelect={() => downloadText(resultFile(answer.result, study))}>Result as JSON</MenuItem>
-    </Menu>
+    <span className="study-menu">
+      <Menu trigger={<Button>Export</Button>} align="end">
+        <MenuItem onSelect={() => downloadText(seriesFile(answer.result, study))}>Series as CSV</MenuItem>
+        <MenuItem onSelect={() => downloadText(resultFile(answer.result, study))}>Result as JSON</MenuItem>
+        {PARTS.map((part) => (
+          <DrawingItems key={part} part={part} onDraw={(format) => void draw(part, format)} />
+        ))}
+      </Menu>
+      {failed && (
+        <span role="alert" className="said">
+          The drawing could not be made: a font did not load. Try again.
+        </span>
+      )}
+    </span>
+  );
+}
+
+function DrawingItems({ part, onDraw }: { part: string; onDraw: (format: ExportFormat) => void }) {
+  return (
+    <>
+      <MenuHeading>{part}</MenuHeading>
+      {FORMATS.map((format) => (
+        <MenuItem key={format} onSelect={() => onDraw(format)}>
+          {`${part.charAt(0).toUpperCase()}${part.slice(1)} as ${format.toUpperCase()}`}
+        </MenuItem>
+      ))}
+    </>
   );
 }

@@ -1,3 +1,5 @@
+import type { SessionStudyInput } from '@voltiplano/engine';
+import type { SessionAnswer } from '@voltiplano/engine/worker';
 import type { RefObject } from 'react';
 import { LedgerFlow } from '../../../charts/ledger-flow.tsx';
 import { Caution } from '../../../components/caution.tsx';
@@ -6,37 +8,21 @@ import { useUnits } from '../../../lib/units.ts';
 import { useRun } from '../hooks/run-context.ts';
 import { sessionHeadlines } from '../model/session-headlines.ts';
 import { HeatSection } from './heat-section.tsx';
-import { RunNotices } from './run-notices.tsx';
+import { RunFailureNotice, WaitingInputs } from './run-notices.tsx';
 import { SessionSentence } from './session-sentence.tsx';
 import { StripsSection } from './strips-section.tsx';
 
-type Props = { drawing: RefObject<HTMLDivElement | null> };
+/** The drawings that can be exported. */
+export type Drawings = Record<'strips' | 'ledger', RefObject<HTMLDivElement | null>>;
 
 /** Sentence, numbers, strips, ledger, heat: what the session does, in words first. */
-export function ResultsPanel({ drawing }: Props) {
-  const { answer, study, baseline } = useRun();
-  const units = useUnits();
+export function ResultsPanel({ drawings }: { drawings: Drawings }) {
+  const { answer, study } = useRun();
   return (
     <section className="res" aria-label="Results">
-      <RunNotices />
+      <RunFailureNotice />
       {answer && study ? (
-        <>
-          <div className="res-head">
-            <SessionSentence result={answer.result} />
-            <HeadlineNumbers numbers={sessionHeadlines(answer.result, study, units, baseline?.result ?? null)} />
-          </div>
-          <StripsSection answer={answer} study={study} drawing={drawing} />
-          <section aria-labelledby="ledger-title">
-            <div className="bar">
-              <h2 id="ledger-title">Ledger</h2>
-              <span className="about">
-                energy from the grid to the cells; each loss is one ledge, heights to scale above the break
-              </span>
-            </div>
-            <LedgerFlow ledger={answer.result.energyLedger} />
-          </section>
-          <HeatSection thermal={answer.thermal} />
-        </>
+        <Results answer={answer} study={study} drawings={drawings} />
       ) : (
         <p className="say waiting">Running the session.</p>
       )}
@@ -45,5 +31,32 @@ export function ResultsPanel({ drawing }: Props) {
         <Caution invented />
       </div>
     </section>
+  );
+}
+
+type ResultsProps = { answer: SessionAnswer; study: SessionStudyInput; drawings: Drawings };
+
+function Results({ answer, study, drawings }: ResultsProps) {
+  const { baseline } = useRun();
+  const units = useUnits();
+  return (
+    <>
+      <div className="res-head">
+        <WaitingInputs />
+        <SessionSentence result={answer.result} />
+        <HeadlineNumbers numbers={sessionHeadlines(answer.result, study, units, baseline?.result ?? null)} />
+      </div>
+      <StripsSection answer={answer} study={study} drawing={drawings.strips} />
+      <section aria-labelledby="ledger-title">
+        <div className="bar">
+          <h2 id="ledger-title">Ledger</h2>
+          <span className="about">
+            energy from the grid to the cells; each loss is one ledge, heights to scale above the break
+          </span>
+        </div>
+        <LedgerFlow ref={drawings.ledger} ledger={answer.result.energyLedger} />
+      </section>
+      <HeatSection thermal={answer.thermal} />
+    </>
   );
 }

@@ -4,37 +4,38 @@ import { useRun } from '../hooks/run-context.ts';
 import { issuesOf } from '../model/derived.ts';
 import { labelOfPath } from '../model/issue-text.ts';
 
-/** Above the results: why there is none, or which inputs the curves do not follow. */
-export function RunNotices() {
+/** Above the results: why the present study has none. */
+export function RunFailureNotice() {
   const { failure, tryAgain, answer } = useRun();
+  if (!failure) return null;
+  const kept = answer ? 'What follows is of the last study that ran.' : '';
+  if (failure.kind === 'refused')
+    return (
+      <Notice kind="stop">
+        {[...failure.sentences, kept].filter(Boolean).map((sentence) => (
+          <p key={sentence}>{sentence}</p>
+        ))}
+      </Notice>
+    );
+  const again = (
+    <button type="button" className="lnk" onClick={tryAgain}>
+      Try again
+    </button>
+  );
+  return (
+    <Notice kind="stop" action={again}>
+      {`The run broke off: ${failure.message.replace(/\.$/, '')}. ${kept}`}
+    </Notice>
+  );
+}
+
+/** Which inputs the curves do not follow yet; its line is always there, so that nothing moves. */
+export function WaitingInputs() {
   const issues = useDesk(({ sheet }) => issuesOf(sheet.draft));
   const names = [...new Set(issues.map((issue) => `“${labelOfPath(issue.path)}”`))];
-  const kept = answer ? ' The curves below are those of the last study that ran.' : '';
   return (
-    <>
-      {failure?.kind === 'refused' && (
-        <Notice kind="stop">
-          {failure.sentences.map((sentence) => (
-            <p key={sentence}>{sentence}</p>
-          ))}
-          {kept && <p>{kept.trim()}</p>}
-        </Notice>
-      )}
-      {failure?.kind === 'crashed' && (
-        <Notice
-          kind="stop"
-          action={
-            <button type="button" className="lnk" onClick={tryAgain}>
-              Try again
-            </button>
-          }
-        >
-          {`The run broke off: ${failure.message}.${kept}`.replace('..', '.')}
-        </Notice>
-      )}
-      <p className="res-status" role="status">
-        {names.length > 0 && `The curves keep the last good value of ${names.join(' and ')} until it is mended.`}
-      </p>
-    </>
+    <p className="res-status" role="status">
+      {names.length > 0 && `The curves keep the last good value of ${names.join(' and ')} until it is mended.`}
+    </p>
   );
 }

@@ -1,4 +1,4 @@
-import { useEffect, useMemo, useRef, useState, type RefObject } from 'react';
+import { useEffect, useMemo, useRef, useState } from 'react';
 import { DeskContext, useDesk } from '../hooks/use-desk.ts';
 import type { LoadedDesk } from '../hooks/load-desk.ts';
 import { RunContext } from '../hooks/run-context.ts';
@@ -10,7 +10,7 @@ import { DeskActions } from './desk-actions.tsx';
 import { DeskTitleBlock } from './desk-title-block.tsx';
 import { InputsPanel } from './inputs-panel.tsx';
 import { OpenReportDialog } from './open-report-dialog.tsx';
-import { ResultsPanel } from './results-panel.tsx';
+import { ResultsPanel, type Drawings } from './results-panel.tsx';
 import { ShortcutsDialog } from './shortcuts-dialog.tsx';
 
 /** One desk with its study, its results and its files. */
@@ -29,7 +29,7 @@ function Desk({ store, report }: LoadedDesk) {
   const files = useStudyFiles(store, report);
   const kept = useKeptDesk(store);
   const picker = useRef<HTMLInputElement>(null);
-  const drawing = useRef<HTMLDivElement>(null);
+  const drawings = { strips: useRef<HTMLDivElement>(null), ledger: useRef<HTMLDivElement>(null) };
   const [showsKeys, setShowsKeys] = useState(false);
   const { save } = files;
   const commands = useMemo(
@@ -42,9 +42,11 @@ function Desk({ store, report }: LoadedDesk) {
     <RunContext value={run}>
       <DeskTitleBlock
         kept={kept}
-        actions={<DeskActions files={files} picker={picker} drawing={drawing} onShowKeys={() => setShowsKeys(true)} />}
+        actions={
+          <DeskActions files={files} picker={picker} drawings={drawings} onShowKeys={() => setShowsKeys(true)} />
+        }
       />
-      <DeskSides drawing={drawing} />
+      <DeskSides drawings={drawings} />
       <ShortcutsDialog open={showsKeys} onOpenChange={setShowsKeys} />
       <OpenReportDialog report={files.report} onClose={files.forgetReport} />
     </RunContext>
@@ -57,7 +59,7 @@ const SIDES = [
 ] as const;
 
 /** Inputs and results, beside each other or, on a telephone, one at a time. */
-function DeskSides({ drawing }: { drawing: RefObject<HTMLDivElement | null> }) {
+function DeskSides({ drawings }: { drawings: Drawings }) {
   const [side, setSide] = useState<'results' | 'inputs'>('results');
   return (
     <>
@@ -70,7 +72,7 @@ function DeskSides({ drawing }: { drawing: RefObject<HTMLDivElement | null> }) {
       </div>
       <div className={`desk show-${side}`}>
         <InputsPanel />
-        <ResultsPanel drawing={drawing} />
+        <ResultsPanel drawings={drawings} />
       </div>
     </>
   );

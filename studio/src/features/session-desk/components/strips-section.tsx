@@ -5,6 +5,7 @@ import { stripKeys, type StripKey } from '../../../charts/strip-specs.ts';
 import { WordSwitch } from '../../../components/word-switch.tsx';
 import type { SessionStudyInput } from '@voltiplano/engine';
 import type { SessionAnswer } from '@voltiplano/engine/worker';
+import { LimitMinutes } from './limit-minutes.tsx';
 import { useDesk, useDispatch } from '../hooks/use-desk.ts';
 import { useRun } from '../hooks/run-context.ts';
 import { filledOf, issuesOf } from '../model/derived.ts';
@@ -48,9 +49,11 @@ export function StripsSection({ answer, study, drawing }: Props) {
         cursor={cursor}
         onCursor={setCursor}
         stale={isWorking || waits || failure !== null}
+        working={isWorking}
         taper={taper}
         bounds={bounds}
       />
+      <LimitMinutes result={answer.result} baseline={baseline?.result ?? null} />
     </section>
   );
 }

@@ -1,10 +1,10 @@
+import { saveFile } from '../../../charts/chart-export.ts';
 import { useCallback, useMemo, useState } from 'react';
 import type { DeskStore } from '../model/desk-store.ts';
 import type { Example } from '../model/examples.ts';
 import { studyFile, type TextFile } from '../model/export-files.ts';
 import { readStudyFile } from '../model/study-file.ts';
 import { studyLink } from '../model/study-link.ts';
-import { download } from './download.ts';
 import { openLinkedStudy, type OpenReport } from './open-linked-study.ts';
 
 export type StudyFiles = {
@@ -47,7 +47,7 @@ export function useStudyFiles(store: DeskStore, firstReport: OpenReport | null):
 }
 
 export function downloadText({ name, text, type }: TextFile): void {
-  download(name, new Blob([text], { type }));
+  saveFile(new Blob([text], { type }), name);
 }
 
 async function copyLinkOf(store: DeskStore): Promise<string> {

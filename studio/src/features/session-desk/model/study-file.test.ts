@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest';
 import { sampleStudy } from './sample-study.ts';
-import { fileNameOf, readStudyFile, studyFileText } from './study-file.ts';
+import { readStudyFile, studyFileText } from './study-file.ts';
 
 test('readStudyFile gives back exactly what studyFileText wrote', () => {
   expect(readStudyFile(studyFileText(sampleStudy))).toEqual({ study: sampleStudy });
@@ -20,9 +20,4 @@ test('readStudyFile lists path, rule and value of every field at fault', () => {
 test('readStudyFile says what is no JSON and what is no study', () => {
   expect(readStudyFile('{')).toMatchObject({ issues: [{ rule: 'json' }] });
   expect(readStudyFile('{"format":"other"}')).toMatchObject({ issues: [{ path: 'format' }] });
-});
-
-test('fileNameOf keeps letters, drops marks', () => {
-  expect(fileNameOf('Vicuña at Salar Tola, 10–80 %', 'json')).toBe('vicuna-at-salar-tola-10-80.json');
-  expect(fileNameOf(undefined, 'csv')).toBe('session.csv');
 });

@@ -27,14 +27,3 @@ export function readStudyFile(text: string): OpenedFile {
 export function studyFileText(study: SessionStudyInput): string {
   return `${JSON.stringify(study, null, 2)}\n`;
 }
-
-/** A file name from a title: letters and digits of any script, joined by hyphens. */
-export function fileNameOf(title: string | undefined, ending: string): string {
-  const name = (title ?? '')
-    .toLowerCase()
-    .normalize('NFKD')
-    .replace(/\p{M}/gu, '')
-    .replace(/[^\p{L}\p{N}]+/gu, '-')
-    .replace(/^-|-$/g, '');
-  return `${name || 'session'}.${ending}`;
-}
