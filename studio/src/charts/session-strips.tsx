@@ -40,8 +40,10 @@ type Props = {
   /** Minutes since plug-in, whichever the axis; null where nobody has placed it yet. */
   cursor: number | null;
   onCursor: (minute: number) => void;
-  /** A newer run is under way. */
+  /** The curves are those of an older study: drawn faint. */
   stale?: boolean;
+  /** A newer run is under way; stale curves without one wait for an input to be mended. */
+  working?: boolean;
   taper?: TaperTable | null;
   bounds?: StrategyBounds;
   notes?: readonly StripNote[];
@@ -167,7 +169,7 @@ function StripsSheet(props: Props & { width: number }) {
             place={place}
             distanceUnit={units.distanceUnit}
           />
-          <StripCursor layout={layout} live={live} place={place} x={x(at)} working={stale} />
+          <StripCursor layout={layout} live={live} place={place} x={x(at)} working={props.working ?? stale} />
         </svg>
         <CursorSlider
           layout={layout}
