@@ -31,3 +31,7 @@ export {
   type SessionRun,
 } from './session/simulate-session.ts';
 export { thermalAnalysis, type SteadyState, type ThermalAnalysis } from './thermal/thermal-analysis.ts';
+export { runStudy, type StudyResult } from './run-study.ts';
+export { studyJsonSchema } from './study/json-schema.ts';
+export type * from './trip/result.ts';
+export { simulateTrip, type TripOptions } from './trip/simulate-trip.ts';

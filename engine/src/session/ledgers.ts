@@ -2,7 +2,7 @@ import { integralNames, type IntegralName } from '../pack/layout.ts';
 import type { PackSystem } from '../pack/pack-system.ts';
 import type { EnergyLedger, ThermalLedger } from './result.ts';
 
-const J_PER_KWH = 3.6e6;
+export const J_PER_KWH = 3.6e6;
 
 /** Growth of each ledger integral between two states [J]. */
 export function integralsBetween(

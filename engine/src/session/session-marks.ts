@@ -2,13 +2,13 @@ import { findRoot } from '../integrate/find-root.ts';
 import type { Step } from '../integrate/stepper.ts';
 import type { Session } from '../study/schema.ts';
 import { Extreme } from './extreme.ts';
+import { J_PER_KWH } from './ledgers.ts';
 import { limitCodes, type LimitCode } from './limits.ts';
 import type { EndReason, MinuteMark, SessionMetrics, SocMark } from './result.ts';
 import type { SessionSolution } from './happenings.ts';
 
 const SOC_MARKS = ['10', '20', '30', '40', '50', '60', '70', '80', '90', '100'] as const;
 const MINUTE_MARKS = ['10', '15', '20', '30'] as const;
-const J_PER_KWH = 3.6e6;
 
 type SocReading = { tS: number; stationJ: number; batteryJ: number };
 /** One quantity whose highest value is wanted, and how to read it after a look. */

@@ -1,6 +1,6 @@
 import { findRoot } from '../integrate/find-root.ts';
 import { Solution } from '../integrate/solution.ts';
-import type { Stepper} from '../integrate/stepper.ts';
+import type { Stepper } from '../integrate/stepper.ts';
 import { type Step } from '../integrate/stepper.ts';
 import type { SessionStudy } from '../study/schema.ts';
 import {
