@@ -113,7 +113,12 @@ export function LimitBand({ result, width, height = 96 }: BandProps) {
       {ticks(0, end, 4).map((minute) => (
         <Fragment key={minute}>
           <line x1={x(minute)} x2={x(minute)} y1={height} y2={height + 5} stroke="var(--ink)" />
-          <Label x={x(minute)} y={height + 20} anchor={minute === 0 ? 'start' : 'middle'} figure>
+          <Label
+            x={x(minute)}
+            y={height + 20}
+            anchor={minute === 0 ? 'start' : x(minute) > width - 12 ? 'end' : 'middle'}
+            figure
+          >
             {minute === 0 ? '0 min' : minute}
           </Label>
         </Fragment>

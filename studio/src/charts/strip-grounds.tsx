@@ -1,4 +1,5 @@
 import { memo } from 'react';
+import { fringeOf } from './fringe.ts';
 import { limitFill, LimitPatterns } from './limit-marks.tsx';
 import type { PlacedSpan } from './limit-spans.ts';
 import { limitBedEdge } from './limits.ts';
@@ -32,7 +33,7 @@ export const StripGrounds = memo(function StripGrounds({ prefix, layout, columns
           <g clipPath={`url(#${prefix}ground)`}>
             <Ground strip={power} columns={columns} xs={xs} x={x} />
             {spans.map((span) => (
-              <Fringe
+              <FringeBed
                 key={span.fromRow}
                 prefix={prefix}
                 span={span}
@@ -87,19 +88,12 @@ function Ground({ strip, columns, xs, x }: CurveProps) {
 type FringeProps = CurveProps & { prefix: string; span: PlacedSpan; depth: number };
 
 /** The bed that hangs under the power line, in the colour and hatch of the limit that holds it. */
-function Fringe({ prefix, span, strip, columns, xs, x, depth }: FringeProps) {
-  const foot = strip.top + strip.height;
-  const last = Math.min(span.toRow + 1, xs.length - 1);
-  const upper: Point[] = [];
-  for (let row = span.fromRow; row <= last; row++) {
-    // The row after the span closes it only where both stand on the same moment and the line does not jump.
-    if (row > span.toRow && columns.stationKw[row] !== columns.stationKw[span.toRow]) break;
-    upper.push([x(xs[row]!), strip.y(columns.stationKw[row]!)]);
-  }
-  const lower = upper.map(([px, py]): Point => [px, Math.min(foot, py + depth)]).reverse();
+function FringeBed({ prefix, span, strip, columns, xs, x, depth }: FringeProps) {
+  const px = xs.map(x);
+  const { upper, lower } = fringeOf(span, px, columns.stationKw.map(strip.y), depth, strip.top + strip.height);
   return (
     <>
-      <path d={`${linePath([...upper, ...lower])}Z`} fill={limitFill(prefix, span.code)} />
+      <path d={`${linePath([...upper, ...lower.toReversed()])}Z`} fill={limitFill(prefix, span.code)} />
       <path d={linePath(lower)} fill="none" stroke={limitBedEdge(span.code)} strokeWidth={0.8} />
     </>
   );
