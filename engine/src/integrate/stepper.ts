@@ -17,6 +17,8 @@ export type StepperOptions = {
   diagnose: () => string;
 };
 
+const MOST_SHORTENED = 8;
+
 export type Derivative = (t: number, y: number[], dy: number[]) => void;
 
 /**
@@ -27,9 +29,13 @@ export class Stepper {
   evaluations = 0;
   starts = 0;
   steps = 0;
-  private readonly solver: Solver;
+  private solver: Solver;
+  private readonly makeSolver: () => Solver;
+  private maxStepS: number;
+  private shortened = 0;
 
   constructor(derivative: Derivative, options: StepperOptions) {
+    this.maxStepS = options.maxStepS;
     const size = options.absoluteTolerance.length;
     // odex looks a component's place up in this list for every reading; here each stands at its own index.
     const components = Array.from({ length: size }, (_, i) => i);
@@ -38,17 +44,27 @@ export class Stepper {
       if (++this.evaluations > options.maxEvaluations) throw overBudget(options, t);
       derivative(t, y, dy);
     };
-    this.solver = new Solver(counted, size, {
-      rawFunction: true,
-      denseOutput: true,
-      denseComponents: components,
-      relativeTolerance: options.relativeTolerance,
-      absoluteTolerance: options.absoluteTolerance,
-      maxStepSize: options.maxStepS,
-      initialStepSize: options.firstStepS,
-      maxExtrapolationColumns: 7,
-      maxSteps: options.maxEvaluations,
-    });
+    this.makeSolver = () =>
+      new Solver(counted, size, {
+        rawFunction: true,
+        denseOutput: true,
+        denseComponents: components,
+        relativeTolerance: options.relativeTolerance,
+        absoluteTolerance: options.absoluteTolerance,
+        maxStepSize: this.maxStepS,
+        initialStepSize: Math.min(options.firstStepS, this.maxStepS),
+        maxExtrapolationColumns: 7,
+        maxSteps: options.maxEvaluations,
+      });
+    this.solver = this.makeSolver();
+  }
+
+  /** Holds all further steps to a quarter, after a trial step left the numbers' range; false where that was done often enough. */
+  shorten(): boolean {
+    if (++this.shortened > MOST_SHORTENED) return false;
+    this.maxStepS /= 4;
+    this.solver = this.makeSolver();
+    return true;
   }
 
   /** Steps from (t, y) to `end`; the caller may leave off at any of them. */

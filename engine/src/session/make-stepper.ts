@@ -10,7 +10,7 @@ export type Accuracy = {
 };
 
 const DEFAULT_RTOL = 5e-6;
-const MAX_EVALUATIONS = 2_000_000;
+const MAX_EVALUATIONS = 500_000;
 /** Longest step as a multiple of the shortest time constant, and the first step after a start [s]: measured, see the bench. */
 const STABLE_STEPS = 3;
 const FIRST_STEP_S = 2;

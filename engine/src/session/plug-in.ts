@@ -52,3 +52,17 @@ export function decideBoost(restV: number, station: Station, boost: Boost | unde
     station.voltageMaxV,
   );
 }
+
+/**
+ * Until the station's current has risen the pack feeds the auxiliaries itself; checks that it can.
+ *
+ * @throws {StudyError} `REFUSED` with the power asked for and the most the pack gives
+ */
+export function checkAuxiliaries({ restV, ohm, auxiliaryW }: PackSystem): void {
+  const mostW = (restV * restV) / (4 * ohm);
+  if (auxiliaryW <= mostW) return;
+  const message =
+    `Cannot start: at plug-in the pack must feed ${(auxiliaryW / 1000).toFixed(1)} kW of auxiliaries, ` +
+    `but at ${(ohm * 1000).toFixed(0)} mΩ it gives ${(mostW / 1000).toFixed(1)} kW at most.`;
+  throw studyError('REFUSED', 'cell.r0Milliohm', 'auxiliaries-above-pack', message);
+}

@@ -3,7 +3,7 @@ import { TaperTable } from '../strategy/taper-table.ts';
 import type { SessionStudy } from '../study/schema.ts';
 import { studyError } from '../study/study-error.ts';
 import { ChargeCurrent } from './charge-current.ts';
-import { decideBoost, inletOf, stateAtPlugIn } from './plug-in.ts';
+import { checkAuxiliaries, decideBoost, inletOf, stateAtPlugIn } from './plug-in.ts';
 
 /** Raised inside a trial step that ran out of the numbers' range; the run shortens its steps and tries again. */
 export class NotFinite extends Error {}
@@ -28,6 +28,7 @@ export class SessionSystem {
     this.start = stateAtPlugIn(this.pack, study.session);
     this.pack.observe(this.start);
     this.boosted = decideBoost(this.pack.restV, study.station, study.boost);
+    checkAuxiliaries(this.pack);
     this.charge = new ChargeCurrent({ ...study, inlet, boost: study.boost }, this.pack, this.taper, this.boosted);
   }
 

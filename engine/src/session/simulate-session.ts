@@ -133,7 +133,9 @@ class SessionSimulation {
         this.options.onProgress?.(this.share());
       }
     } catch (error) {
-      throw error instanceof NotFinite ? inconsistent(this.t) : error;
+      if (!(error instanceof NotFinite)) throw error;
+      if (this.stepper.shorten()) return;
+      throw inconsistent(this.t);
     }
     if (nextPowerS < this.endS) this.jump(() => this.takePowerStep());
     else this.finalRow('maxMin');

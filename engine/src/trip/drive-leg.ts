@@ -1,4 +1,5 @@
 import { Solution } from '../integrate/solution.ts';
+import type { Stepper } from '../integrate/stepper.ts';
 import { crossing } from '../session/happenings.ts';
 import { limitCodes } from '../session/limits.ts';
 import { thermalLedger } from '../session/ledgers.ts';
@@ -63,21 +64,28 @@ class LegDrive {
     this.row();
     const atStart = this.failing();
     if (atStart !== null) return this.finish(atStart);
-    const stepper = makeStepper(system.derivative, system.pack, this.accuracy);
-    try {
-      for (const step of stepper.from(this.t, this.y, this.endS)) {
-        solution.advance(step);
-        const failure = this.walk(step.t1);
-        if (failure !== null) return this.finish(failure);
-        this.t = step.t1;
-        this.y = step.y;
-      }
-    } catch (error) {
-      throw error instanceof NotFinite ? inconsistent(this.t) : error;
-    }
+    const failure = this.drive(makeStepper(system.derivative, system.pack, this.accuracy));
+    if (failure !== null) return this.finish(failure);
     solution.look(this.endS);
     this.row();
     return this.finish(null);
+  }
+
+  private drive(stepper: Stepper): TripFailureReason | null {
+    try {
+      for (const step of stepper.from(this.t, this.y, this.endS)) {
+        this.solution.advance(step);
+        const failure = this.walk(step.t1);
+        if (failure !== null) return failure;
+        this.t = step.t1;
+        this.y = step.y;
+      }
+      return null;
+    } catch (error) {
+      if (!(error instanceof NotFinite)) throw error;
+      if (stepper.shorten()) return this.drive(stepper);
+      throw inconsistent(this.t);
+    }
   }
 
   /** Looks along a step; the reason where the pack cannot go on. */
