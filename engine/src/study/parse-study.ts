@@ -93,13 +93,20 @@ function ruleOf(issue: Issue, found: unknown): { rule: string; text: string } {
         ? { rule: 'missing', text: 'is missing' }
         : {
             rule: 'type',
-            text: `must be ${issue.expected === 'int' ? 'a whole number' : `a ${issue.expected}`}${but}`,
+            text: `must be ${issue.expected === 'int' ? 'a whole number' : `${/^[aeiou]/.test(issue.expected) ? 'an' : 'a'} ${issue.expected}`}${but}`,
           };
+    case 'invalid_union':
+      return { rule: 'choice', text: oneOf((issue as { options?: unknown[] }).options ?? [], but) };
     case 'invalid_value':
-      return { rule: 'choice', text: `must be ${issue.values.map((value) => show(value)).join(' or ')}${but}` };
+      return { rule: 'choice', text: oneOf(issue.values, but) };
     default:
       return { rule: issue.code, text: `${issue.message}${but}` };
   }
+}
+
+function oneOf(options: readonly unknown[], but: string): string {
+  const choice = options.map(show).join(' or ');
+  return but === '' ? `is missing: give ${choice}` : `must be ${choice}${but}`;
 }
 
 function tooSmall(issue: Issue & { code: 'too_small' }, found: unknown, but: string): string {
