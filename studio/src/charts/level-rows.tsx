@@ -37,7 +37,7 @@ export function LevelRows({ layout, live, axis, range, x, cursor, place, distanc
   const cursorX = x(cursor);
   const from = phone ? 0 : left - 48;
   const foot = rowsTop + rows.length * rowHeight;
-  const free = stops.filter((value) => Math.abs(x(value) - cursorX) > (phone ? 32 : 26));
+  const free = stops.filter((value) => Math.abs(x(value) - cursorX) > 40);
   return (
     <>
       {rows.map((row, i) => {

@@ -114,14 +114,16 @@ const temperatures: StripSpec = {
   digits: decimals.temperature,
   heights: [132, 120],
   tickCount: 4,
-  range: ([live, ...others]) =>
-    rangeAround(
-      ...extremes([
-        ...(live ? [live.core, live.surface, live.inlet, live.coolantIn] : []),
-        ...others.map((run) => run.core),
-      ]),
-      4,
-    ),
+  range: ([live, ...others], { hotTo }) => {
+    const [least, greatest] = extremes([
+      ...(live ? [live.core, live.surface, live.inlet, live.coolantIn] : []),
+      ...others.map((run) => run.core),
+    ]);
+    const span = Math.max(greatest - least, 1);
+    // The end of the hot limit belongs in sight once the session comes near it.
+    const near = hotTo !== undefined && hotTo < greatest + span / 4 ? hotTo : greatest;
+    return rangeAround(least, Math.max(greatest, near) + span * 0.1, 4);
+  },
 };
 
 const anode: StripSpec = {

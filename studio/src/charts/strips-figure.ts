@@ -82,6 +82,9 @@ function figureLayout({ layout, range, color, zooms }: FigureInput): Partial<Lay
     dragmode: zooms ? 'zoom' : false,
     font: { family: cssFont(color('--f-num')), size: 12, color: color('--ink2') },
     xaxis: {
+      // Said outright, so that Plotly need not look through the data.
+      type: 'linear',
+      autorange: false,
       anchor: yName(last),
       range: [...range],
       showgrid: false,
@@ -102,6 +105,8 @@ function yAxis(strip: PlacedStrip, { plotTop, plotBottom }: StripLayout, color: 
   return {
     domain: [Math.max(0, from), Math.min(1, from + strip.height / whole)],
     anchor: 'x',
+    type: 'linear',
+    autorange: false,
     range: strip.range,
     fixedrange: true,
     showgrid: false,

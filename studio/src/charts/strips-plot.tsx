@@ -22,7 +22,13 @@ type Props = {
 export function StripsPlot({ live, baseline, axis, range, layout, onRange, onFailed }: Props) {
   const ref = useRef<HTMLDivElement>(null);
   const plotly = useRef<Plotly | null>(null);
+  const color = useRef(tokenReader());
   const isNight = useIsNight();
+
+  // Reads the page's tokens anew when day turns to night; the drawing below follows in the same turn.
+  useEffect(() => {
+    color.current = tokenReader();
+  }, [isNight]);
 
   // Speaks to Plotly: draws what changed, at most once per frame, and hears zoom and pan back.
   useEffect(() => {
@@ -37,7 +43,7 @@ export function StripsPlot({ live, baseline, axis, range, layout, onRange, onFai
         data,
         layout: figure,
         config,
-      } = stripsFigure({ live, baseline, axis, range, layout, color: tokenReader(), zooms });
+      } = stripsFigure({ live, baseline, axis, range, layout, color: color.current, zooms });
       await plotly.current.react(element, data, figure, config);
       listen(element, onRange);
     };

@@ -12,10 +12,11 @@ const chosen = storedValue<Daylight>('voltiplano.daylight', 'system', (value): v
 );
 
 export function setDaylight(daylight: Daylight): void {
-  chosen.set(daylight);
   const { classList } = document.documentElement;
   classList.toggle('day', daylight === 'day');
   classList.toggle('night', daylight === 'night');
+  // Told last: who draws with the tokens reads them from the page.
+  chosen.set(daylight);
 }
 
 export function useDaylight(): Daylight {

@@ -76,7 +76,9 @@ type CellProps = { minutes: CliffCell; x: number; y: number; width: number; heig
 /** A cell of the map; a dot where it has not been run. */
 function Cell({ minutes, x, y, width, height }: CellProps) {
   if (minutes === undefined) return <circle cx={x + width / 2} cy={y + height / 2} r={1} fill="var(--edge)" />;
-  return <rect x={x} y={y} width={width} height={height} fill={`var(--a${rampStep(minutes)})`} />;
+  return (
+    <rect x={x} y={y} width={width} height={height} fill={`var(--a${rampStep(minutes)})`} shapeRendering="crispEdges" />
+  );
 }
 
 function inWords(columns: readonly CliffCell[][]): string {
