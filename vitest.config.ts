@@ -29,13 +29,24 @@ export default defineConfig({
       },
       { test: { name: 'server', environment: 'node', include: ['server/src/**/*.test.ts'], setupFiles } },
       {
+        // Without a DOM: setting one up takes longer than most of these tests.
         test: {
           name: 'studio',
+          root: 'studio',
+          environment: 'node',
+          include: ['src/**/*.test.ts'],
+          setupFiles,
+          testTimeout: 15_000,
+        },
+      },
+      {
+        test: {
+          name: 'studio-dom',
           root: 'studio',
           environment: 'jsdom',
           // Testing Library unmounts after each test only where it finds a global afterEach.
           globals: true,
-          include: ['src/**/*.test.{ts,tsx}'],
+          include: ['src/**/*.test.tsx'],
           setupFiles,
           testTimeout: 15_000,
         },
