@@ -18,7 +18,9 @@ export default defineConfig({
   outputDir: path.join(ROOT, 'test-results'),
   workers: 1,
   forbidOnly: Boolean(process.env.CI),
-  timeout: 60_000,
+  // Generous, because a small machine draws in software; a journey that hangs still fails.
+  timeout: 120_000,
+  expect: { timeout: 15_000 },
   reporter: 'list',
   use: {
     baseURL: address,
