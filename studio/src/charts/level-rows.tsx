@@ -35,9 +35,16 @@ export function LevelRows({ layout, live, axis, range, x, cursor, place, distanc
   const digits = tickDigits((stops[1] ?? 0) - (stops[0] ?? 0));
   const rows = levelRows(live, axis, digits, distanceUnit).filter((row) => !(phone && row.name === 'kWh in'));
   const cursorX = x(cursor);
+  // At either end the value turns inwards, clear of the rows' names and of the margin.
+  const value: { x: number; anchor: 'start' | 'middle' | 'end' } =
+    cursorX < left + 18
+      ? { x: left + 2, anchor: 'start' }
+      : cursorX > right - 18
+        ? { x: right, anchor: 'end' }
+        : { x: cursorX, anchor: 'middle' };
   const from = phone ? 0 : left - 48;
   const foot = rowsTop + rows.length * rowHeight;
-  const free = stops.filter((value) => Math.abs(x(value) - cursorX) > 40);
+  const free = stops.filter((stop) => Math.abs(x(stop) - cursorX) > 40);
   return (
     <>
       {rows.map((row, i) => {
@@ -55,23 +62,23 @@ export function LevelRows({ layout, live, axis, range, x, cursor, place, distanc
             <Label x={left - 8} y={y + 14} anchor="end">
               {row.name}
             </Label>
-            {free.map((value) => {
-              const px = x(value);
+            {free.map((stop) => {
+              const px = x(stop);
               const atLeft = px < left + 2;
               return (
                 <Label
-                  key={value}
+                  key={stop}
                   x={px + (atLeft ? 2 : 0)}
                   y={y + 14}
                   anchor={atLeft ? 'start' : px > right - 12 ? 'end' : 'middle'}
                   figure
                   ink={i === 0 ? 'var(--ink)' : undefined}
                 >
-                  {row.atTick(numberAt(row.column, placeOn(xs, value)))}
+                  {row.atTick(numberAt(row.column, placeOn(xs, stop)))}
                 </Label>
               );
             })}
-            <Label x={cursorX} y={y + 14} anchor="middle" figure ink="var(--clay)" weight={600}>
+            <Label x={value.x} y={y + 14} anchor={value.anchor} figure ink="var(--clay)" weight={600}>
               {row.atCursor(numberAt(row.column, place))}
             </Label>
           </g>

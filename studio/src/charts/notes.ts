@@ -52,23 +52,40 @@ export function sessionNotes(result: SessionResult, units: Units): StripNote[] {
 /** A note's elbow and words on the sheet [px]. */
 export type PlacedNote = { elbowX: number; elbowY: number; toLeft: boolean };
 
+export type Box = { left: number; right: number; top: number; bottom: number };
+
+const overlap = (a: Box, b: Box) => a.left < b.right && b.left < a.right && a.top < b.bottom && b.top < a.bottom;
+
 /**
- * Places a note's words inside its strip: to the other side where the right end is too near, below where the top is.
- * Null where neither side has room.
+ * Places a note's words inside its strip: as wished where they fit, else on the other side or below, clear of words
+ * that already stand there. Null where no place has room.
+ *
+ * @param taken  boxes of other words
  */
 export function placeNote(
   point: readonly [x: number, y: number],
   note: Pick<StripNote, 'dx' | 'dy' | 'text'>,
-  area: { left: number; right: number; top: number; bottom: number },
+  area: Box,
+  taken: readonly Box[] = [],
 ): PlacedNote | null {
   const [x, y] = point;
   if (x < area.left || x > area.right) return null;
-  const reach = Math.abs(note.dx) + 12 + textWidth(note.text);
-  const wantsLeft = note.dx < 0;
-  const fitsRight = x + reach <= area.right;
-  const fitsLeft = x - reach >= area.left;
-  if (!fitsRight && !fitsLeft) return null;
-  const toLeft = wantsLeft ? fitsLeft : !fitsRight;
-  const dy = y + note.dy < area.top + 8 || y + note.dy > area.bottom - 6 ? -note.dy : note.dy;
-  return { elbowX: x + (toLeft ? -1 : 1) * Math.abs(note.dx), elbowY: Math.max(y + dy, area.top + 8), toLeft };
+  const width = textWidth(note.text);
+  const wishes = [note.dx, -note.dx].flatMap((dx) => [note.dy, -note.dy].map((dy) => ({ dx, dy })));
+  for (const { dx, dy } of wishes) {
+    const way = Math.sign(dx);
+    const elbowX = x + dx;
+    const elbowY = y + dy;
+    const start = elbowX + 12 * way;
+    const words = {
+      left: Math.min(start, start + way * width),
+      right: Math.max(start, start + way * width),
+      top: elbowY - 8,
+      bottom: elbowY + 6,
+    };
+    const inside =
+      words.left >= area.left && words.right <= area.right && words.top >= area.top && words.bottom <= area.bottom;
+    if (inside && !taken.some((box) => overlap(box, words))) return { elbowX, elbowY, toLeft: way < 0 };
+  }
+  return null;
 }

@@ -13,6 +13,8 @@ export type PlotlyFigure = { data: Data[]; layout: Partial<Layout>; config: Part
 export type PlotlyElement = HTMLElement & {
   on?: (event: string, listener: (change: Record<string, unknown>) => void) => void;
   removeAllListeners?: (event: string) => void;
+  /** What is drawn now; while the axis is panned its range moves here first. */
+  _fullLayout?: { xaxis?: { range?: readonly number[] } };
 };
 
 let loading: Promise<Plotly> | undefined;

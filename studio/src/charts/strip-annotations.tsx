@@ -2,11 +2,12 @@ import { limitSide, type SessionResult } from '@voltiplano/engine';
 import { Fragment, memo } from 'react';
 import { formatNumber, formatQuantity } from '../lib/format.ts';
 import { dimensionLine, dimensionsOf } from './dimension-lines.ts';
+import { textWidth } from './label-fit.ts';
 import { Label } from './label.tsx';
 import { LimitBeds } from './limit-band.tsx';
 import { minutesPerSide, type PlacedSpan } from './limit-spans.ts';
 import { limitSides } from './limits.ts';
-import { placeNote, type StripNote } from './notes.ts';
+import { placeNote, type Box, type StripNote } from './notes.ts';
 import { StripNames } from './strip-names.tsx';
 import type { ShownBounds } from './strip-specs.ts';
 import type { PlacedStrip, StripLayout } from './strip-layout.ts';
@@ -115,6 +116,15 @@ function boundsOf(
   ];
 }
 
+/** Where the words of a strip's bounds stand. */
+function boundBoxes(strip: PlacedStrip, bounds: ShownBounds, layout: StripLayout): Box[] {
+  const right = layout.right;
+  return boundsOf(strip, bounds, layout.size === 'phone').map(({ value, text, below }) => {
+    const y = strip.y(value) + (below ? 14 : -4);
+    return { left: right - 8 - textWidth(text), right, top: y - 11, bottom: y + 3 };
+  });
+}
+
 const formatShort = (value: number) => formatNumber(value, Number.isInteger(value) ? 0 : 1);
 
 /** Dotted verticals where one limit hands over to the next. */
@@ -145,10 +155,10 @@ function TaperLineMarks({ layout, taper, x, prefix }: Props) {
   if (!strip || !taper) return null;
   return (
     <>
-      <clipPath id={`${prefix}taper`}>
+      <clipPath id={`${prefix}clip-taper`}>
         <rect x={layout.left} y={strip.top - 5} width={layout.right - layout.left + 5} height={strip.height + 10} />
       </clipPath>
-      <g clipPath={`url(#${prefix}taper)`}>
+      <g clipPath={`url(#${prefix}clip-taper)`}>
         <path
           d={linePath(taper.line.map(({ at, currentA }) => [x(at), strip.y(currentA)]))}
           fill="none"
@@ -172,14 +182,14 @@ function TaperLineMarks({ layout, taper, x, prefix }: Props) {
   );
 }
 
-function Notes({ layout, notes, xOfMinute }: Props) {
+function Notes({ layout, notes, bounds, xOfMinute }: Props) {
   return notes.map((note) => {
     const strip = layout.strips.find(({ spec }) => spec.key === note.strip);
     if (!strip || (note.wideOnly && layout.size !== 'wide')) return null;
     const x = xOfMinute(note.atMin);
     const y = strip.y(note.value);
     const area = { left: layout.left, right: layout.right, top: strip.top - 10, bottom: strip.top + strip.height };
-    const placed = placeNote([x, y], note, area);
+    const placed = placeNote([x, y], note, area, boundBoxes(strip, bounds, layout));
     if (!placed) return null;
     const { elbowX, elbowY, toLeft } = placed;
     const way = toLeft ? -1 : 1;

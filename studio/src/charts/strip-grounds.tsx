@@ -27,10 +27,10 @@ export const StripGrounds = memo(function StripGrounds({ prefix, layout, columns
       ))}
       {power && columns && (
         <>
-          <clipPath id={`${prefix}ground`}>
+          <clipPath id={`${prefix}clip-ground`}>
             <rect x={layout.left} y={power.top} width={layout.right - layout.left} height={power.height} />
           </clipPath>
-          <g clipPath={`url(#${prefix}ground)`}>
+          <g clipPath={`url(#${prefix}clip-ground)`}>
             <Ground strip={power} columns={columns} xs={xs} x={x} />
             {spans.map((span) => (
               <FringeBed

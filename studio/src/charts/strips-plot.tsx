@@ -23,6 +23,7 @@ export function StripsPlot({ live, baseline, axis, range, layout, onRange, onFai
   const ref = useRef<HTMLDivElement>(null);
   const plotly = useRef<Plotly | null>(null);
   const color = useRef(tokenReader());
+  const isPanning = useRef(false);
   const isNight = useIsNight();
 
   // Reads the page's tokens anew when day turns to night; the drawing below follows in the same turn.
@@ -37,7 +38,8 @@ export function StripsPlot({ live, baseline, axis, range, layout, onRange, onFai
     let stopped = false;
     const draw = async () => {
       plotly.current ??= await loadPlotly();
-      if (stopped) return;
+      // Plotly holds the pointer: it has drawn this range itself, and tells when it lets go.
+      if (stopped || isPanning.current) return;
       const zooms = window.matchMedia('(pointer: fine)').matches;
       const {
         data,
@@ -45,7 +47,7 @@ export function StripsPlot({ live, baseline, axis, range, layout, onRange, onFai
         config,
       } = stripsFigure({ live, baseline, axis, range, layout, color: color.current, zooms });
       await plotly.current.react(element, data, figure, config);
-      listen(element, onRange);
+      listen(element, onRange, isPanning);
     };
     const frame = requestAnimationFrame(() => void draw().catch(onFailed));
     return () => {
@@ -65,15 +67,26 @@ export function StripsPlot({ live, baseline, axis, range, layout, onRange, onFai
   return <div ref={ref} className="strips-plot absolute inset-0" />;
 }
 
-function listen(element: PlotlyElement, onRange: Props['onRange']): void {
-  const onChange = (change: Record<string, unknown>) => {
-    const from = change['xaxis.range[0]'];
-    const to = change['xaxis.range[1]'];
-    if (typeof from === 'number' && typeof to === 'number') onRange([from, to]);
-  };
+function listen(element: PlotlyElement, onRange: Props['onRange'], isPanning: { current: boolean }): void {
   for (const event of ['plotly_relayout', 'plotly_relayouting', 'plotly_doubleclick'])
     element.removeAllListeners?.(event);
-  element.on?.('plotly_relayout', onChange);
-  element.on?.('plotly_relayouting', onChange);
+  element.on?.('plotly_relayouting', (change) => {
+    const range = rangeIn(change);
+    // A box drawn for a zoom announces its range too, but the axis stands still until it is let go.
+    if (!range || element._fullLayout?.xaxis?.range?.[0] !== range[0]) return;
+    isPanning.current = true;
+    onRange(range);
+  });
+  element.on?.('plotly_relayout', (change) => {
+    const range = rangeIn(change);
+    isPanning.current = false;
+    if (range) onRange(range);
+  });
   element.on?.('plotly_doubleclick', () => onRange(null));
+}
+
+function rangeIn(change: Record<string, unknown>): [number, number] | null {
+  const from = change['xaxis.range[0]'];
+  const to = change['xaxis.range[1]'];
+  return typeof from === 'number' && typeof to === 'number' ? [from, to] : null;
 }
