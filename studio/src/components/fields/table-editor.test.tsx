@@ -27,9 +27,9 @@ function Held({ onGrid }: { onGrid: (grid: Grid) => void }) {
       minRows={1}
       issues={[]}
       isMoved={() => false}
-      onGrid={(next) => {
-        setGrid(next);
-        onGrid(next);
+      onEdit={(edit) => {
+        setGrid(edit.grid);
+        onGrid(edit.grid);
       }}
     />
   );

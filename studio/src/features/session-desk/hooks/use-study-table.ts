@@ -1,6 +1,7 @@
 import type { StudyIssue } from '@voltiplano/engine';
 import type { Grid } from '../../../components/fields/grid.ts';
-import type { CellIssue } from '../../../components/fields/table-editor.tsx';
+import type { GridEdit } from '../../../components/fields/table-edits.ts';
+import type { CellIssue } from '../../../components/fields/table-issues.tsx';
 import type { TemperatureUnit } from '../../../lib/units.ts';
 import { issuesOf } from '../model/derived.ts';
 import { gridAt } from '../model/draft.ts';
@@ -26,7 +27,7 @@ export function useStudyTable(path: string, temperature: TemperatureUnit) {
     general,
     meanwhile: path in draft.pending ? 'The curves still use the last good table.' : undefined,
     isMoved: (row: number, column: number) => before !== null && grid[row]?.[column] !== before[row]?.[column],
-    onGrid: (next: Grid, label: string, typingAt?: string) =>
+    onEdit: ({ grid: next, label, typingAt }: GridEdit) =>
       dispatch({ type: 'entry', path, entry: next, label, ...(typingAt ? { typingAt: `${path} ${typingAt}` } : {}) }),
     onLeave: () => dispatch({ type: 'leave-field' }),
   };
