@@ -35,3 +35,4 @@ export { runStudy, type StudyResult } from './run-study.ts';
 export { studyJsonSchema } from './study/json-schema.ts';
 export type * from './trip/result.ts';
 export { simulateTrip, type TripOptions } from './trip/simulate-trip.ts';
+export { PiecewiseCubic } from './table/piecewise-cubic.ts';
