@@ -24,6 +24,10 @@ export const router = createBrowserRouter([
               Component: (await import('../features/session-desk/session-desk-page.tsx')).SessionDeskPage,
             }),
           },
+          {
+            path: '/schema',
+            lazy: async () => ({ Component: (await import('../features/schema/schema-page.tsx')).SchemaPage }),
+          },
           { path: '*', element: <NotFoundPage /> },
         ],
       },

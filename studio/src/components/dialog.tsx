@@ -31,8 +31,3 @@ export function Dialog({ title, about, trigger, open, onOpenChange, children }: 
     </Radix.Root>
   );
 }
-
-/** Closes the dialog around it when its child is pressed. */
-export function DialogClose({ children }: { children: ReactNode }) {
-  return <Radix.Close asChild>{children}</Radix.Close>;
-}

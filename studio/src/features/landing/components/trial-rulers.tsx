@@ -1,4 +1,5 @@
 import type { LimitCode, SessionResult } from '@voltiplano/engine';
+import { LimitBandThumbnail } from '../../../charts/limit-band.tsx';
 import { LimitName } from '../../../charts/limit-marks.tsx';
 import { formatNumber, formatQuantity } from '../../../lib/format.ts';
 import { useUnits } from '../../../lib/units.ts';
@@ -59,9 +60,9 @@ function Outcome({ result }: { result: SessionResult | null }) {
   const minutes = result?.metrics.minutes10To80 ?? null;
   const longest = result && longestLimit(result);
   return (
-    <div className="res" aria-live="polite">
+    <div className="res">
       <span className="text-table text-ink2">10–80 %, and what holds longest</span>
-      <div className="v">
+      <div className="v" aria-live="polite">
         {result ? formatQuantity('min', minutes) : ' '}
         {minutes !== null && <small>min</small>}
       </div>
@@ -72,6 +73,9 @@ function Outcome({ result }: { result: SessionResult | null }) {
             <span className="num text-ink3">{formatQuantity('min', longest.minutes)} min</span>
           </>
         )}
+      </div>
+      <div className="mt-[8px] min-h-[15px]">
+        {result && <LimitBandThumbnail result={result} width={226} height={15} />}
       </div>
     </div>
   );
