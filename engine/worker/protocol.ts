@@ -23,8 +23,5 @@ export type SessionWorker = {
     options: RunOptions,
     onProgress: ((share: number) => void) | null,
   ): Outcome<PackedAnswer>;
-  summarise(
-    studies: SessionStudyInput[],
-    onProgress: ((done: number) => void) | null,
-  ): Outcome<Outcome<RunSummary>[]>;
+  summarise(studies: SessionStudyInput[], onProgress: ((done: number) => void) | null): Outcome<Outcome<RunSummary>[]>;
 };
