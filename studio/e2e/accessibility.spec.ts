@@ -2,6 +2,8 @@ import AxeBuilder from '@axe-core/playwright';
 import type { Page } from '@playwright/test';
 import { expect, field, openDesk, test } from './quiet-page.ts';
 
+test.describe.configure({ timeout: 180_000 });
+
 const RULES = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
 
 async function violations(page: Page, without: string[] = []): Promise<string[]> {

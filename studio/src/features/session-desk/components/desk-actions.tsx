@@ -7,16 +7,15 @@ import { examples } from '../model/examples.ts';
 import { ExportMenu } from './export-menu.tsx';
 import type { Drawings } from './results-panel.tsx';
 
-type Props = {
+type Props = Drawings & {
   files: StudyFiles;
   /** The file input, so that a key can open it too. */
   picker: RefObject<HTMLInputElement | null>;
-  drawings: Drawings;
   onShowKeys: () => void;
 };
 
 /** Examples, files, export, and the one next step: keep what is there as baseline. */
-export function DeskActions({ files, picker, drawings, onShowKeys }: Props) {
+export function DeskActions({ files, picker, stripsRef, ledgerRef, onShowKeys }: Props) {
   const dispatch = useDispatch();
   return (
     <>
@@ -31,7 +30,7 @@ export function DeskActions({ files, picker, drawings, onShowKeys }: Props) {
         ))}
       </Menu>
       <StudyMenu files={files} onOpen={() => picker.current?.click()} onShowKeys={onShowKeys} />
-      <ExportMenu drawings={drawings} />
+      <ExportMenu stripsRef={stripsRef} ledgerRef={ledgerRef} />
       <Button go onClick={() => dispatch({ type: 'keep-baseline' })}>
         Keep as baseline
       </Button>

@@ -9,14 +9,15 @@ import type { Drawings } from './results-panel.tsx';
 
 const FORMATS: ExportFormat[] = ['svg', 'png'];
 const PARTS = ['strips', 'ledger'] as const;
+type DrawingPart = (typeof PARTS)[number];
 
 /** The results as tables and drawings. */
-export function ExportMenu({ drawings }: { drawings: Drawings }) {
+export function ExportMenu({ stripsRef, ledgerRef }: Drawings) {
   const { answer, study } = useRun();
   const [failed, setFailed] = useState(false);
   if (!answer || !study) return <Button unavailable="No result yet">Export</Button>;
-  const draw = async (part: (typeof PARTS)[number], format: ExportFormat) => {
-    const element = drawings[part].current;
+  const draw = async (part: DrawingPart, format: ExportFormat) => {
+    const element = (part === 'strips' ? stripsRef : ledgerRef).current;
     if (!element) return;
     setFailed(false);
     await exportDrawing(element, { title: study.title ?? 'Session', part, format }).catch(() => setFailed(true));

@@ -12,17 +12,19 @@ import { RunFailureNotice, WaitingInputs } from './run-notices.tsx';
 import { SessionSentence } from './session-sentence.tsx';
 import { StripsSection } from './strips-section.tsx';
 
+type Drawing = RefObject<HTMLDivElement | null>;
+
 /** The drawings that can be exported. */
-export type Drawings = Record<'strips' | 'ledger', RefObject<HTMLDivElement | null>>;
+export type Drawings = { stripsRef: Drawing; ledgerRef: Drawing };
 
 /** Sentence, numbers, strips, ledger, heat: what the session does, in words first. */
-export function ResultsPanel({ drawings }: { drawings: Drawings }) {
+export function ResultsPanel({ stripsRef, ledgerRef }: Drawings) {
   const { answer, study } = useRun();
   return (
     <section className="res" aria-label="Results">
       <RunFailureNotice />
       {answer && study ? (
-        <Results answer={answer} study={study} drawings={drawings} />
+        <Results answer={answer} study={study} stripsRef={stripsRef} ledgerRef={ledgerRef} />
       ) : (
         <p className="say waiting">Running the session.</p>
       )}
@@ -34,9 +36,9 @@ export function ResultsPanel({ drawings }: { drawings: Drawings }) {
   );
 }
 
-type ResultsProps = { answer: SessionAnswer; study: SessionStudyInput; drawings: Drawings };
+type ResultsProps = Drawings & { answer: SessionAnswer; study: SessionStudyInput };
 
-function Results({ answer, study, drawings }: ResultsProps) {
+function Results({ answer, study, stripsRef, ledgerRef }: ResultsProps) {
   const { baseline } = useRun();
   const units = useUnits();
   return (
@@ -46,7 +48,7 @@ function Results({ answer, study, drawings }: ResultsProps) {
         <SessionSentence result={answer.result} />
         <HeadlineNumbers numbers={sessionHeadlines(answer.result, study, units, baseline?.result ?? null)} />
       </div>
-      <StripsSection answer={answer} study={study} drawing={drawings.strips} />
+      <StripsSection answer={answer} study={study} drawing={stripsRef} />
       <section aria-labelledby="ledger-title">
         <div className="bar">
           <h2 id="ledger-title">Ledger</h2>
@@ -54,7 +56,7 @@ function Results({ answer, study, drawings }: ResultsProps) {
             energy from the grid to the cells; each loss is one ledge, heights to scale above the break
           </span>
         </div>
-        <LedgerFlow ref={drawings.ledger} ledger={answer.result.energyLedger} />
+        <LedgerFlow ref={ledgerRef} ledger={answer.result.energyLedger} />
       </section>
       <HeatSection thermal={answer.thermal} />
     </>

@@ -29,7 +29,8 @@ function Desk({ store, report }: LoadedDesk) {
   const files = useStudyFiles(store, report);
   const kept = useKeptDesk(store);
   const picker = useRef<HTMLInputElement>(null);
-  const drawings = { strips: useRef<HTMLDivElement>(null), ledger: useRef<HTMLDivElement>(null) };
+  const stripsRef = useRef<HTMLDivElement>(null);
+  const ledgerRef = useRef<HTMLDivElement>(null);
   const [showsKeys, setShowsKeys] = useState(false);
   const { save } = files;
   const commands = useMemo(
@@ -43,10 +44,16 @@ function Desk({ store, report }: LoadedDesk) {
       <DeskTitleBlock
         kept={kept}
         actions={
-          <DeskActions files={files} picker={picker} drawings={drawings} onShowKeys={() => setShowsKeys(true)} />
+          <DeskActions
+            files={files}
+            picker={picker}
+            stripsRef={stripsRef}
+            ledgerRef={ledgerRef}
+            onShowKeys={() => setShowsKeys(true)}
+          />
         }
       />
-      <DeskSides drawings={drawings} />
+      <DeskSides stripsRef={stripsRef} ledgerRef={ledgerRef} />
       <ShortcutsDialog open={showsKeys} onOpenChange={setShowsKeys} />
       <OpenReportDialog report={files.report} onClose={files.forgetReport} />
     </RunContext>
@@ -59,7 +66,7 @@ const SIDES = [
 ] as const;
 
 /** Inputs and results, beside each other or, on a telephone, one at a time. */
-function DeskSides({ drawings }: { drawings: Drawings }) {
+function DeskSides({ stripsRef, ledgerRef }: Drawings) {
   const [side, setSide] = useState<'results' | 'inputs'>('results');
   return (
     <>
@@ -72,7 +79,7 @@ function DeskSides({ drawings }: { drawings: Drawings }) {
       </div>
       <div className={`desk show-${side}`}>
         <InputsPanel />
-        <ResultsPanel drawings={drawings} />
+        <ResultsPanel stripsRef={stripsRef} ledgerRef={ledgerRef} />
       </div>
     </>
   );

@@ -5,6 +5,7 @@ import { OptionalPart } from './optional-part.tsx';
 import { QuantityFields } from './quantity-field.tsx';
 import { SectionFrame } from './section-frame.tsx';
 import { StudyTable } from './study-table.tsx';
+import { TableChart } from './table-chart.tsx';
 
 export function StationSection() {
   const { fields, more } = sections.station;
@@ -13,7 +14,7 @@ export function StationSection() {
       <QuantityFields fields={fields} />
       <OptionalPart path="station.powerSteps" noun="power sharing plan" without="Power is not shared.">
         <h4 className="part">Power sharing</h4>
-        <StudyTable path="station.powerSteps" />
+        <StudyTable path="station.powerSteps" chart={(grid) => <TableChart path="station.powerSteps" grid={grid} />} />
       </OptionalPart>
       <MoreFields name="station" fields={more} first={<NameField path="station.name" label="Name" />} />
     </SectionFrame>
