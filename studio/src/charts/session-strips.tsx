@@ -25,8 +25,9 @@ import { stripSpecs, type ShownBounds, type StripKey } from './strip-specs.ts';
 import { StripsPlot } from './strips-plot.tsx';
 import { taperLine, type TaperTable } from './taper-line.ts';
 import { usePointerCursor } from './use-pointer-cursor.ts';
-import { useVisibleRange } from './use-visible-range.ts';
+import { shiftedRange, useVisibleRange } from './use-visible-range.ts';
 import { useWidth } from './use-width.ts';
+import { ZoomWords } from './zoom-words.tsx';
 
 /** Bounds of the strategy, in the engine's units; those left out are not drawn. */
 export type StrategyBounds = { ceilingV?: number; marginMv?: number; hotFromC?: number; hotToC?: number };
@@ -182,11 +183,12 @@ function StripsSheet(props: Props & { width: number }) {
         />
       </div>
       <p className="strips-words">
-        {zoomed && (
-          <button type="button" className="lnk" onClick={() => setRange(null)}>
-            Show the whole session
-          </button>
-        )}
+        <ZoomWords
+          zoomed={zoomed}
+          onZoom={(factor) => zoomAbout(at, factor)}
+          onShift={(share) => setRange(shiftedRange(range, whole, share))}
+          onWhole={() => setRange(null)}
+        />
         {!hasAnode && !hidden.has('anode') && <span>Anode potential: this cell describes no anode.</span>}
         {plotError !== null && <span className="text-stop">The curves could not be loaded. Load the page again.</span>}
       </p>

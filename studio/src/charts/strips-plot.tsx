@@ -1,4 +1,4 @@
-import { useEffect, useRef } from 'react';
+import { useEffect, useLayoutEffect, useRef } from 'react';
 import { useIsNight } from '../lib/daylight.ts';
 import { loadPlotly, type Plotly, type PlotlyElement } from './plotly.ts';
 import type { StripAxis } from './strip-axis.ts';
@@ -27,32 +27,28 @@ export function StripsPlot({ live, baseline, axis, range, layout, onRange, onFai
   const isNight = useIsNight();
 
   // Reads the page's tokens anew when day turns to night; the drawing below follows in the same turn.
-  useEffect(() => {
+  useLayoutEffect(() => {
     color.current = tokenReader();
   }, [isNight]);
 
-  // Speaks to Plotly: draws what changed, at most once per frame, and hears zoom and pan back.
-  useEffect(() => {
+  // Speaks to Plotly, before the browser paints, so that its lines and the drawing over them change in one frame.
+  useLayoutEffect(() => {
     const element = ref.current as PlotlyElement | null;
     if (!element) return;
     let stopped = false;
-    const draw = async () => {
-      plotly.current ??= await loadPlotly();
+    const draw = (loaded: Plotly) => {
+      plotly.current = loaded;
       // Plotly holds the pointer: it has drawn this range itself, and tells when it lets go.
       if (stopped || isPanning.current) return;
       const zooms = window.matchMedia('(pointer: fine)').matches;
-      const {
-        data,
-        layout: figure,
-        config,
-      } = stripsFigure({ live, baseline, axis, range, layout, color: color.current, zooms });
-      await plotly.current.react(element, data, figure, config);
+      const figure = stripsFigure({ live, baseline, axis, range, layout, color: color.current, zooms });
+      loaded.react(element, figure.data, figure.layout, figure.config).catch(onFailed);
       listen(element, onRange, isPanning);
     };
-    const frame = requestAnimationFrame(() => void draw().catch(onFailed));
+    if (plotly.current) draw(plotly.current);
+    else loadPlotly().then(draw).catch(onFailed);
     return () => {
       stopped = true;
-      cancelAnimationFrame(frame);
     };
   }, [live, baseline, axis, range, layout, isNight, onRange, onFailed]);
 

@@ -26,3 +26,10 @@ export function zoomedRange(range: Range, whole: Range, value: number, factor: n
   const from = Math.min(Math.max(value - share * width, whole[0]), whole[1] - width);
   return [from, from + width];
 }
+
+/** Moves a range by a share of its width, inside the whole. */
+export function shiftedRange(range: Range, whole: Range, share: number): Range {
+  const width = range[1] - range[0];
+  const from = Math.min(Math.max(range[0] + share * width, whole[0]), whole[1] - width);
+  return [from, from + width];
+}
