@@ -49,6 +49,17 @@ describe('the studio', () => {
     expect(res.headers['content-type']).toContain('javascript');
   });
 
+  it('packs a large script on the wire where the browser takes it packed', async () => {
+    const script = `export const text = '${'charge '.repeat(2000)}';`;
+    writeFileSync(path.join(studioDir, 'assets/large-4d5e6f.js'), script);
+    const res = await request(app()).get('/assets/large-4d5e6f.js').set('Accept-Encoding', 'gzip').expect(200);
+    expect(res.headers['content-encoding']).toBe('gzip');
+    expect(res.headers['vary']).toContain('Accept-Encoding');
+    const plain = await request(app()).get('/assets/large-4d5e6f.js').set('Accept-Encoding', 'identity').expect(200);
+    expect(plain.headers['content-encoding']).toBeUndefined();
+    expect(plain.headers['content-length']).toBe(String(script.length));
+  });
+
   it('serves files without a hash to be asked for anew', async () => {
     const res = await request(app()).get('/mark.svg').expect(200);
     expect(res.headers['cache-control']).toBe('no-cache');

@@ -1,3 +1,4 @@
+import compression from 'compression';
 import express, { type Express } from 'express';
 import type { Logger } from 'pino';
 import { healthRoutes } from '../health/health-routes.ts';
@@ -18,7 +19,7 @@ export type AppDeps = {
 /** Makes the application. It never listens: `main.ts` and tests do. */
 export function createApp({ studioDir, version, logger, nowMs }: AppDeps): Express {
   const app = express();
-  app.use(requestLog(logger), securityHeaders());
+  app.use(requestLog(logger), securityHeaders(), compression());
   app.use('/api', healthRoutes(version, nowMs), notFound);
   app.use(studioFiles(studioDir));
   app.use(notFound);
