@@ -54,6 +54,8 @@ export class ChargeCurrent {
   private readonly taper: TaperTable;
   private readonly taperFactor: number;
   private readonly stationCurrentMaxA: number;
+  /** Station current at which a boost converter behind this inlet gets its most power [A]: more brings less. */
+  private readonly mostPowerA: number;
   private readonly rampAPerS: number;
   private readonly inletMaxA: number;
   private readonly inletFromC: number;
@@ -76,6 +78,7 @@ export class ChargeCurrent {
     this.inletToC = inlet.derateToC;
     this.limits = new PackLimits({ pack, strategy }, system);
     this.boosted = boosted;
+    this.mostPowerA = boosted && system.inletOhm > 0 ? station.voltageMaxV / (2 * system.inletOhm) : Infinity;
     this.boostW = (boost?.powerMaxKw ?? 0) * 1000;
     this.efficiency = boost?.efficiency ?? 1;
   }
@@ -113,7 +116,7 @@ export class ChargeCurrent {
     }
     // Station-side limits on I_d; of equal limits the station's are listed first.
     let Id = this.stationSide(I);
-    let cap = this.stationCurrentMaxA;
+    let cap = this.stationCurrentMaxA < this.mostPowerA ? this.stationCurrentMaxA : this.mostPowerA;
     let capCode = STATION_CURRENT;
     const rampA = this.rampAPerS * seconds;
     if (rampA < cap) {
@@ -136,9 +139,9 @@ export class ChargeCurrent {
       Id = this.stationSide(I);
       code = STATION_POWER;
     }
-    if (!this.boosted && system.restV + system.ohm * I + Id * system.inletOhm > this.stationVoltageMaxV) {
+    if (!this.boosted && system.restV + system.ohm * I + Id * system.inletOhm >= this.stationVoltageMaxV) {
       const voltage = this.allowedBy(STATION_VOLTAGE, seconds, inletC);
-      if (voltage < I) {
+      if (voltage < I || (voltage === I && code > STATION_VOLTAGE)) {
         I = voltage;
         Id = this.stationSide(I);
         code = STATION_VOLTAGE;
@@ -242,7 +245,8 @@ export class ChargeCurrent {
   private packSide(Id: number): number {
     const { restV, ohm, inletOhm, auxiliaryW } = this.system;
     if (!this.boosted) return packCurrentFor(restV, ohm, auxiliaryW, Id);
-    const watts = this.efficiency * (this.stationVoltageMaxV - Id * inletOhm) * Id - auxiliaryW;
+    const held = Id < this.mostPowerA ? Id : this.mostPowerA;
+    const watts = this.efficiency * (this.stationVoltageMaxV - held * inletOhm) * held - auxiliaryW;
     return currentForPower(restV, ohm, watts);
   }
 }

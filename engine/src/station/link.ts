@@ -47,7 +47,13 @@ export function packCurrentForStationVoltage(
   return I + aux / V > 0 ? I : packCurrentFor(A, B, aux, 0);
 }
 
-/** Station current of a boost converter fed with `volts` behind an inlet, for `watts` drawn from its input [A]. */
+/**
+ * Station current of a boost converter fed with `volts` behind an inlet, for `watts` drawn from its input [A];
+ * Infinity where no current brings that much.
+ */
 export function boostInputCurrent(volts: number, inletOhm: number, watts: number): number {
-  return (2 * watts) / (volts + sqrt(volts * volts - 4 * inletOhm * watts));
+  const disc = volts * volts - 4 * inletOhm * watts;
+  // At the most power itself rounding decides the sign.
+  if (disc < -1e-9 * volts * volts) return Infinity;
+  return (2 * watts) / (volts + sqrt(disc < 0 ? 0 : disc));
 }
