@@ -1,4 +1,4 @@
-import { parseSessionStudy, simulateSession, type SessionStudyInput } from '@voltiplano/engine';
+import { parseSessionStudy, simulateSession } from '@voltiplano/engine';
 import { describe, expect, it } from 'vitest';
 import warmArrival from '../../../examples/vicuna-warm-arrival.json';
 import { unitsOf } from '../lib/units.ts';
