@@ -40,7 +40,7 @@ export function MapEditor(props: Props) {
       <TableCell
         label={mapCellName(kinds, row, column)}
         text={cellText(grid[row]![column]!, measure, temperature)}
-        unit={row === 0 || column === 0 ? shownUnit(measure, temperature) : ''}
+        unit=""
         measure={measure}
         state={cellState(issues, props.isMoved, row, column)}
         errorId={errorId}
@@ -60,10 +60,9 @@ export function MapEditor(props: Props) {
               <tr key={row}>
                 {cells.map((_, column) =>
                   row === 0 && column === 0 ? (
-                    <th
-                      key="corner"
-                      scope="col"
-                    >{`${kinds.rowHead.label} by ${kinds.columnHead.label.toLowerCase()}`}</th>
+                    <th key="corner" scope="col">
+                      {cornerText(kinds, temperature)}
+                    </th>
                   ) : (
                     <td key={column}>{cell(row, column)}</td>
                   ),
@@ -92,6 +91,12 @@ export function MapEditor(props: Props) {
       </div>
     </div>
   );
+}
+
+/** What stands down the side and along the top, with their units: "Soc (%) by coldest surface (°C)". */
+function cornerText({ rowHead, columnHead }: MapKinds, temperature: TemperatureUnit): string {
+  const side = `${rowHead.label} (${shownUnit(rowHead.measure, temperature)})`;
+  return `${side} by ${columnHead.label.toLowerCase()} (${shownUnit(columnHead.measure, temperature)})`;
 }
 
 function Act({ word, onAct }: { word: string; onAct: () => void }) {

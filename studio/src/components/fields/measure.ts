@@ -36,16 +36,20 @@ export function quantityPathOf(path: string): QuantityPath | undefined {
 }
 
 /** Least decimals where the trade has a custom; elsewhere the step decides. */
-const CUSTOMARY: Record<string, number> = { A: 0, mV: 0, kW: 0, W: 0, min: 0, V: 0 };
+const CUSTOMARY: Record<string, number> = { A: 0, mV: 0, kW: 0, W: 0, min: 0, V: 0, '': 2, '1/K': 3 };
+/** Shares and efficiencies are not told apart more finely than this. */
+const LEAST_FRACTION_STEP = 0.005;
 
 /** How one of the engine's quantities is shown. */
 export function measureOf(path: QuantityPath): Measure {
   const { unit, usual, integer }: Quantity = quantities[path];
   if (PERCENT.has(path)) return { unit: unit === 'of z' ? '% of z' : '%', scale: 'percent', decimals: 0, step: 1 };
   const [low, high] = usual ?? [0, 50];
-  const step = integer ? 1 : niceStep((high - low) / 50);
+  const fine = niceStep((high - low) / 50);
+  const step = integer ? 1 : unit === '' ? Math.max(fine, LEAST_FRACTION_STEP) : fine;
   if (unit === '°C') return { unit, scale: 'temperature', decimals: 1, step };
   if (CELL_VOLTAGES.has(path)) return { unit, scale: 'plain', decimals: 3, step: 0.005 };
+  if (integer) return { unit, scale: 'plain', decimals: 0, step };
   return { unit, scale: 'plain', decimals: CUSTOMARY[unit] ?? Math.max(0, -Math.floor(Math.log10(step))), step };
 }
 

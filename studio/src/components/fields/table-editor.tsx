@@ -114,7 +114,7 @@ export function TableEditor(props: Props) {
         )}
         <PasteTable
           title={title}
-          columns={columns.map(({ label, measure }) => [label, shownUnit(measure, temperature)].join(' ').trim())}
+          columns={columns.map(({ label, measure }) => withUnit(label, shownUnit(measure, temperature)))}
           onText={(text) => onEdit(edits.paste(text, 0, 0))}
         />
       </div>
@@ -151,6 +151,10 @@ function useCellFocus() {
     requestAnimationFrame(() => body.current?.rows[row]?.querySelectorAll('input')[column]?.focus());
   };
   return { body, focus };
+}
+
+function withUnit(label: string, unit: string): string {
+  return unit ? `${label} (${unit})` : label;
 }
 
 /** A cell as its input shows it. */

@@ -27,6 +27,7 @@ function TitleField() {
         className="desk-title"
         aria-label="Title"
         value={title}
+        title={title}
         placeholder="Untitled session"
         maxLength={300}
         spellCheck={false}
@@ -49,7 +50,9 @@ function BaselineCell({ title }: { title: string | null }) {
   if (title === null) return 'none';
   return (
     <span className="baseline-cell">
-      <span className="baseline-title">{title}</span>
+      <span className="baseline-title" title={title}>
+        {title}
+      </span>
       <button type="button" className="lnk" onClick={() => dispatch({ type: 'swap-baseline' })}>
         Swap
       </button>

@@ -41,7 +41,7 @@ export function TaperSection() {
       {path && taper.shape !== 'none' && (
         <>
           <StudyTable path={path} did={did} chart={(grid) => <TableChart path={path} grid={grid} />} />
-          <UnitChoice unit={taper.unit} onChange={(unit) => put({ ...taper, unit }, `taper in ${unit}`)} />
+          <UnitChoice unit={taper.unit} />
         </>
       )}
     </SectionFrame>
@@ -49,7 +49,10 @@ export function TaperSection() {
 }
 
 /** A taper's unit; choosing another keeps the numbers, and says so. */
-function UnitChoice({ unit, onChange }: { unit: TaperUnit; onChange: (unit: TaperUnit) => void }) {
+function UnitChoice({ unit }: { unit: TaperUnit }) {
+  const dispatch = useDispatch();
+  const onChange = (value: TaperUnit) =>
+    dispatch({ type: 'parts', parts: [{ path: 'strategy.taper.unit', value }], label: `taper in ${value}` });
   return (
     <div className="unit-choice">
       <span>Numbers in</span>

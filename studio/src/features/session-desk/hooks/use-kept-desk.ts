@@ -13,7 +13,9 @@ const JUST_NOW_MS = 60_000;
 
 /** Keeps the desk in this browser, and says in words how that went. */
 export function useKeptDesk(store: DeskStore): string {
-  const [status, setStatus] = useState('in this browser');
+  const [status, setStatus] = useState(() =>
+    localStorage.getItem(DESK_KEY) === null ? 'nothing changed yet' : 'in this browser',
+  );
   // Speaks to this browser's storage.
   useEffect(() => {
     let waiting: ReturnType<typeof setTimeout> | undefined;

@@ -82,14 +82,15 @@ function shownBounds({ min, max, usual }: Quantity, measure: Measure, temperatur
 function helpOf(quantity: Quantity, measure: Measure, temperature: TemperatureUnit): FieldHelpText {
   const { min, max, above, integer, usual, source, what } = quantity;
   const unit = shownUnit(measure, temperature);
-  const span = (from: number, to: number) => [numberText(from, 0), 'to', numberText(to, 0), unit].join(' ').trim();
+  const withUnit = (value: number) => [numberText(value, 0), unit].join(' ').trim();
+  const span = (from: number, to: number) => `${numberText(from, 0)} to ${withUnit(to)}`;
   const bounds = shownBounds(quantity, measure, temperature);
   const low = toShown(min, measure, temperature);
   const high = toShown(max, measure, temperature);
   return {
     what,
     ...(usual && bounds.usual ? { usual: span(...bounds.usual) } : {}),
-    allowed: `${above ? 'above ' : ''}${span(low, high)}${integer ? ', whole numbers' : ''}`,
+    allowed: `${above ? `above ${numberText(low, 0)}, up to ${withUnit(high)}` : span(low, high)}${integer ? ', whole numbers' : ''}`,
     ...(source ? { source } : {}),
   };
 }

@@ -21,6 +21,15 @@ test('issueSentence speaks the units on screen', () => {
   expect(sentence('session.startSoc', 1.2)).toBe('Must be at most 100 %, but is 120 %.');
 });
 
+test('issueSentence names parts and says no unit twice', () => {
+  const { anode: _none, ...cell } = sampleStudy.cell;
+  const { anodeMarginMv: _margin, ...strategy } = sampleStudy.strategy;
+  const draft = withEntry({ study: { ...sampleStudy, cell, strategy }, pending: {} }, 'strategy.anodeMarginMv', 20);
+  expect(issueSentence(draftIssues(draft)[0]!, measureOf('strategy.anodeMarginMv'), '°C')).toMatch(
+    /^Needs “Anode” of the cell: a margin of 20 mV cannot be guarded/,
+  );
+});
+
 test('issueSentence asks for what is missing and quotes what is no number', () => {
   expect(sentence('station.currentMaxA', null)).toBe('Needs a value.');
   expect(sentence('station.currentMaxA', '35o')).toBe('Must be a number, but is “35o”.');

@@ -22,21 +22,25 @@ export function issueSentence(issue: StudyIssue, measure: Measure | undefined, t
   return `${told.charAt(0).toUpperCase()}${told.slice(1)}.`.replace(/\.\.$/, '.');
 }
 
+/** Parts of a study that messages name and that are no single quantity. */
+const PART_NAMES: Record<string, string> = { 'cell.anode': '“Anode” of the cell' };
+
 /** Fields named in a message, such as `fromC` or `cell.vMaxV`, by their labels. */
 function withLabels(text: string, path: string): string {
   const parent = path.replace(/(\.[A-Za-z0-9]+|\[\d+\])$/, '');
   return text.replace(/\b[a-z][A-Za-z0-9]*(?:\.[a-zA-Z0-9]+|\[\d+\])*/g, (word) => {
     const quantity = quantityPathOf(word) ?? quantityPathOf(`${parent}.${word}`);
-    return quantity ? `“${quantities[quantity].label}”` : word;
+    return quantity ? `“${quantities[quantity].label}”` : (PART_NAMES[word] ?? word);
   });
 }
 
 function withShownNumbers(text: string, measure: Measure, temperature: TemperatureUnit): string {
   const unit = shownUnit(measure, temperature);
-  // Numbers inside a quoted label, such as “COP at 35 °C”, belong to the name.
-  return text.replace(/“[^”]*”|(?<![\w[])-?\d+(?:\.\d+)?(?:e-?\d+)?/g, (found) => {
-    if (found.startsWith('“')) return found;
-    const shown = numberText(toShown(Number(found), measure, temperature), 0);
+  // Numbers inside a quoted label, such as “COP at 35 °C”, belong to the name; a unit already there is not said twice.
+  const told = /“[^”]*”|(?<![\w[])(-?\d+(?:\.\d+)?(?:e-?\d+)?)(?: mV\b)?/g;
+  return text.replace(told, (found, number?: string) => {
+    if (number === undefined) return found;
+    const shown = numberText(toShown(Number(number), measure, temperature), 0);
     return unit ? `${shown} ${unit}` : shown;
   });
 }

@@ -15,7 +15,8 @@ export function sessionHeadlines(
   return readings(study, units, result).map(({ of, ...reading }) => ({
     ...reading,
     value: of(result),
-    ...(baseline ? { baseline: of(baseline) } : {}),
+    // Where neither run came to a number there is nothing to compare.
+    ...(baseline && (of(result) !== null || of(baseline) !== null) ? { baseline: of(baseline) } : {}),
   }));
 }
 
