@@ -22,7 +22,7 @@ export function SchemaPage() {
       {quantityParts(quantities).map(({ part, rows }) => (
         <section key={part} aria-labelledby={`part-${part}`}>
           <h2 id={`part-${part}`}>{part}</h2>
-          <div className="sheet-table" role="region" aria-labelledby={`part-${part}`} tabIndex={0}>
+          <div className="sheet-table" role="region" aria-label={`Inputs of ${part}`} tabIndex={0}>
             <table>
               <thead>
                 <tr>

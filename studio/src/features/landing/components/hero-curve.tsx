@@ -37,7 +37,7 @@ export function HeroCurve({ result, ghosts }: Props) {
           ))}
           {result && <Ground result={result} layout={layout} prefix={prefix} />}
           {ghosts.map((ghost, i) => (
-            <GhostName key={ghost.name} {...ghost} layout={layout} early={i === 0} />
+            <GhostName key={ghost.name} {...ghost} layout={layout} early={i === 0} live={result} />
           ))}
           <TimeScale layout={layout} width={width} />
         </svg>
@@ -86,13 +86,19 @@ function GhostLine({ result, layout }: Ghost & { layout: HeroLayout }) {
   return <path d={linePath(curve(result, layout))} fill="none" stroke="var(--base)" strokeWidth={1.3} />;
 }
 
-/** Named where it stands apart from the others: early for the warm one, late for the cold one. */
-function GhostName({ result, name, layout, early }: Ghost & { layout: HeroLayout; early: boolean }) {
+type GhostNameProps = Ghost & { layout: HeroLayout; early: boolean; live: SessionResult | null };
+
+/** Named where it stands clear above the live curve: early for the warm one, late for the cold one. */
+function GhostName({ result, name, layout, early, live }: GhostNameProps) {
   if (layout.phone) return null;
-  const minute = early ? 9 : Math.min(result.metrics.endMin, layout.endMin) * 0.9;
-  const kw = numberAt(result.series.stationPowerKw, placeOn(minutesOf(result), minute));
+  const kwAt = (run: SessionResult, minute: number) =>
+    minute > run.metrics.endMin ? 0 : numberAt(run.series.stationPowerKw, placeOn(minutesOf(run), minute));
+  const shares = early ? [0.15, 0.3] : [0.9, 0.72, 0.6, 0.5, 0.42];
+  const end = Math.min(result.metrics.endMin, layout.endMin);
+  const minute = shares.map((share) => share * end).find((at) => !live || kwAt(result, at) > kwAt(live, at) + 8);
+  if (minute === undefined) return null;
   return (
-    <Label x={layout.x(minute) + (early ? 0 : 6)} y={layout.y(kw) - 9} ink="var(--ink3)" halo>
+    <Label x={layout.x(minute) + (early ? 0 : 6)} y={layout.y(kwAt(result, minute)) - 9} ink="var(--ink3)" halo>
       {name}
     </Label>
   );
@@ -154,7 +160,8 @@ function SpanNames({ spans, xs, ys, layout }: SpanNamesProps) {
     if (x(span.to) - left < width + 6) return null;
     const end = placeOn(xs, left + width).index;
     const lowest = Math.max(...ys.slice(span.fromRow, end + 1)) + (phone ? 14 : 26);
-    const y = lowest > foot - 42 ? ys[span.fromRow]! - 12 : foot - 10;
+    const highest = Math.min(...ys.slice(span.fromRow, end + 1));
+    const y = lowest > foot - 42 ? highest - 12 : foot - 10;
     return (
       <Fragment key={span.fromRow}>
         <Label x={left} y={y - 17} figure halo={y < foot - 10}>
