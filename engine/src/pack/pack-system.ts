@@ -120,7 +120,8 @@ export class PackSystem {
     const ceiling = n * this.ceilingV;
     const anodeRoom = this.guardAnode ? (n * (phi - this.marginV)) / this.share : Infinity;
     let restV = 0;
-    let ohm = this.busbarOhm;
+    // From 0, not from busbarOhm: a sum that starts at a field V8 keeps tagged is boxed once a segment.
+    let ohm = 0;
     let ceilingCurrent = Infinity;
     let anodeCurrent = Infinity;
     let hottest = -Infinity;
@@ -148,7 +149,7 @@ export class PackSystem {
     }
     this.soc = (z - this.zLow) / this.zSpan;
     this.restV = restV;
-    this.ohm = ohm;
+    this.ohm = ohm + this.busbarOhm;
     this.ceilingCurrent = ceilingCurrent;
     this.anodeCurrent = anodeCurrent;
     this.hottestSurface = hottest;
@@ -262,6 +263,11 @@ export class PackSystem {
     let theta = this.coolant.inC;
     for (let j = 0; j < segments; j++) theta += this.coolant.effectiveness * (y[surface + j] - theta);
     return theta;
+  }
+
+  /** Fraction of full capacity at a driver's soc. */
+  zAt(soc: number): number {
+    return this.zLow + this.zSpan * soc;
   }
 
   /** Energy stored between two states of charge at 25 °C references [J]: a function of z alone. */

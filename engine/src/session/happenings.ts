@@ -32,19 +32,24 @@ export function firstHappening(
   from: number,
   to: number,
 ): Happening | null {
-  const { charge, pack, taper } = solution.system;
   solution.look(to);
-  const code = charge.code;
+  const { system } = solution;
+  const { code } = system.charge;
+  const climbs = overLedge(system) >= 0;
+  const spent = endsAtCutoff(held) && allowedBy(solution, held) <= cutoffA;
+  // Nearly every look ends here, before any closure is made.
+  if (!climbs && !spent && code === held) return null;
   const found: Happening[] = [];
-  const overLedge = () => pack.highestCellV(charge.current) - (taper.endV - REACHED_V);
-  const room = () => allowedBy(solution, held) - cutoffA;
-  const climbs = taper.endV < Infinity && overLedge() >= 0;
-  const spent = endsAtCutoff(held) && room() <= 0;
-  if (climbs) found.push({ kind: 'voltage-ledge', code, t: crossing(solution, overLedge, from, to) });
-  if (spent) found.push({ kind: 'cutoff', code, t: crossing(solution, () => -room(), from, to) });
+  const when = (value: () => number) => crossing(solution, value, from, to);
+  if (climbs) found.push({ kind: 'voltage-ledge', code, t: when(() => overLedge(system)) });
+  if (spent) found.push({ kind: 'cutoff', code, t: when(() => cutoffA - allowedBy(solution, held)) });
   if (code !== held) found.push(handOver(solution, held, code, from, to));
-  if (found.length === 0) return null;
   return found.reduce((first, one) => (one.t < first.t ? one : first));
+}
+
+/** How far the highest cell voltage stands above the next voltage-ledge [V]; −∞ where there is none. */
+function overLedge({ pack, charge, taper }: SessionSystem): number {
+  return taper.endV < Infinity ? pack.highestCellV(charge.current) - (taper.endV - REACHED_V) : -Infinity;
 }
 
 /** Current that one limit allows at the moment last looked at [A]. */

@@ -48,11 +48,12 @@ export class SessionMarks {
 
   /** Takes the moment just looked at into the extremes; leaves the system showing it. */
   sample(t: number): void {
-    for (const { extreme, read } of this.tracked) {
-      this.solution.look(t);
-      extreme.sample(t, read());
+    const { tracked, solution } = this;
+    for (let i = 0; i < tracked.length; i++) {
+      solution.look(t);
+      tracked[i].extreme.sample(t, tracked[i].read());
     }
-    this.solution.look(t);
+    solution.look(t);
   }
 
   /** A jump or the end comes next: what lies before it says nothing about peaks after it. */
@@ -74,11 +75,11 @@ export class SessionMarks {
 
   /** Notes soc and minute marks passed between two moments of a step. */
   pass(step: Step, from: number, to: number): void {
-    const { zLow, zSpan, layout } = this.solution.system.pack;
-    while (this.socWaiting.length > 0) {
+    const { layout } = this.solution.system.pack;
+    while (this.socWaiting.length > 0 && step.dense(0, to) >= this.zAt(this.socWaiting[0])) {
       const mark = this.socWaiting[0];
-      const off = (t: number) => step.dense(0, t) - (zLow + (zSpan * Number(mark)) / 100);
-      if (off(to) < 0) break;
+      const z = this.zAt(mark);
+      const off = (t: number) => step.dense(0, t) - z;
       const start = off(from);
       const tS = start < 0 ? findRoot(off, from, start, to, off(to), 1e-7) : from;
       this.atSoc.set(mark, {
@@ -93,6 +94,10 @@ export class SessionMarks {
       this.batteryJAt.set(mark, step.dense(layout.integrals + 9, Number(mark) * 60));
       this.minuteWaiting = this.minuteWaiting.slice(1);
     }
+  }
+
+  private zAt(mark: SocMark): number {
+    return this.solution.system.pack.zAt(Number(mark) / 100);
   }
 
   /** The session's headline numbers, from its end at `endS` with the whole state `y`. */

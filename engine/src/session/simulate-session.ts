@@ -190,16 +190,12 @@ class SessionSimulation {
   private socCrossing(step: Step): { t: number; ledge: number | null } | null {
     const { taper, pack } = this.system;
     const { targetSoc } = this.study.session;
-    const off = (soc: number) => (t: number) => step.dense(0, t) - (pack.zLow + pack.zSpan * soc);
-    const when = (soc: number) => {
-      const f = off(soc);
-      return findRoot(f, step.t0, f(step.t0), step.t1, f(step.t1), MOMENT_S);
-    };
     const left = taper.startSoc - LEDGE_LEFT_SOC;
-    if (taper.endSoc < targetSoc && off(taper.endSoc)(step.t1) >= 0)
-      return { t: when(taper.endSoc), ledge: taper.step + 1 };
-    if (off(targetSoc)(step.t1) >= 0) return { t: when(targetSoc), ledge: null };
-    if (left > -Infinity && off(left)(step.t1) < 0) return { t: when(left), ledge: taper.step - 1 };
+    const z = step.dense(0, step.t1);
+    if (taper.endSoc < targetSoc && z >= pack.zAt(taper.endSoc))
+      return { t: whenAt(step, pack.zAt(taper.endSoc)), ledge: taper.step + 1 };
+    if (z >= pack.zAt(targetSoc)) return { t: whenAt(step, pack.zAt(targetSoc)), ledge: null };
+    if (left > -Infinity && z < pack.zAt(left)) return { t: whenAt(step, pack.zAt(left)), ledge: taper.step - 1 };
     return null;
   }
 
@@ -320,4 +316,10 @@ class SessionSimulation {
     const statistics = { evaluations, looks: this.solution.looks, steps, starts, rows: result.series.tS.length };
     return { result, finalState: this.y, statistics };
   }
+}
+
+/** When z passes a value within a step that meets it [s]. */
+function whenAt(step: Step, z: number): number {
+  const off = (t: number) => step.dense(0, t) - z;
+  return findRoot(off, step.t0, off(step.t0), step.t1, off(step.t1), MOMENT_S);
 }

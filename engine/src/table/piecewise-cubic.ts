@@ -40,10 +40,19 @@ export class PiecewiseCubic {
       const secant = (y[i + 1] - y[i]) / h;
       const d0 = slopes[i];
       const d1 = slopes[i + 1];
-      const c = [y[i], d0, (3 * secant - 2 * d0 - d1) / h, (d0 + d1 - 2 * secant) / (h * h)];
-      this.c.set(c, 4 * i);
-      this.area[i + 1] = this.area[i] + h * (c[0] + h * (c[1] / 2 + h * (c[2] / 3 + (h * c[3]) / 4)));
+      this.setPiece(i, y[i], d0, (3 * secant - 2 * d0 - d1) / h, (d0 + d1 - 2 * secant) / (h * h));
     }
+  }
+
+  /** Sets a piece's coefficients and the area up to its right break; pieces come in order. */
+  private setPiece(i: number, c0: number, c1: number, c2: number, c3: number): void {
+    const { c, x, area } = this;
+    const h = x[i + 1] - x[i];
+    c[4 * i] = c0;
+    c[4 * i + 1] = c1;
+    c[4 * i + 2] = c2;
+    c[4 * i + 3] = c3;
+    area[i + 1] = area[i] + h * (c0 + h * (c1 / 2 + h * (c2 / 3 + (h * c3) / 4)));
   }
 
   /** PCHIP through the rows of a table (Fritsch & Butland 1984). */
@@ -62,7 +71,7 @@ export class PiecewiseCubic {
       null,
     );
     for (let i = 0; i < x.length - 1; i++)
-      curve.c.set([y[i] * scale, ((y[i + 1] - y[i]) * scale) / (x[i + 1] - x[i]), 0, 0], 4 * i);
+      curve.setPiece(i, y[i] * scale, ((y[i + 1] - y[i]) * scale) / (x[i + 1] - x[i]), 0, 0);
     return curve;
   }
 
@@ -107,8 +116,9 @@ export class PiecewiseCubic {
     if (x >= high) return this.area[pieces] + (x - high) * this.last;
     const i = this.pieceOf(x);
     const h = x - this.x[i];
-    const [c0, c1, c2, c3] = [0, 1, 2, 3].map((k) => this.c[4 * i + k]) as [number, number, number, number];
-    return this.area[i] + h * (c0 + h * (c1 / 2 + h * (c2 / 3 + (h * c3) / 4)));
+    const c = this.c;
+    const k = 4 * i;
+    return this.area[i] + h * (c[k] + h * (c[k + 1] / 2 + h * (c[k + 2] / 3 + (h * c[k + 3]) / 4)));
   }
 
   /** Piece that holds x, x inside the breaks. Searches from the last piece used: neighbouring calls are near. */
