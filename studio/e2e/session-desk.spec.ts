@@ -148,3 +148,34 @@ test('a table pasted from a spreadsheet replaces the ledges, and a bad cell is n
   await expect(page.getByText('Must be a number')).toHaveCount(0);
   await expect(field(page, 'From soc, ledge 4')).toHaveCount(0);
 });
+
+test('strips and ledger are saved as drawings that stand alone', async ({ page }) => {
+  await openDesk(page);
+  const exported = (item: string) =>
+    saved(page, async () => {
+      await page.getByRole('button', { name: 'Export', exact: true }).click();
+      await page.getByRole('menuitem', { name: item }).click();
+    });
+  const strips = await exported('Strips as SVG');
+  expect(strips.download.suggestedFilename()).toBe('vicuna-at-salar-tola-warm-arrival-strips.svg');
+  expect(strips.text).toContain('A simulation is not a test');
+  expect(strips.text).not.toContain('var(--');
+  const ledger = await exported('Ledger as PNG');
+  const signature = (await readFile(await ledger.download.path())).subarray(1, 4).toString();
+  expect(signature).toBe('PNG');
+});
+
+test('degrees Fahrenheit are for the eye alone: the study keeps its Celsius', async ({ page }) => {
+  await openDesk(page);
+  await page.getByRole('button', { name: 'Display' }).click();
+  await page.getByRole('menuitemradio', { name: '°F' }).click();
+  await page.keyboard.press('Escape');
+  await expect(field(page, 'Hot limit from')).toHaveValue('93.2');
+  await field(page, 'Ambient').fill('77');
+  await expect(page.getByText('just now')).toBeVisible();
+  const { text } = await saved(page, () => studyMenu(page, 'Save the study'));
+  expect(JSON.parse(text)).toMatchObject({
+    session: { ambientC: 25 },
+    strategy: { hotDerate: { fromC: 34, toC: 42 } },
+  });
+});

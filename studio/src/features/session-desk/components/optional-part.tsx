@@ -8,7 +8,8 @@ type Props = {
   path: keyof typeof newParts;
   /** What it is called in "Add a chiller", "Remove the chiller". */
   noun: string;
-  article?: 'a' | 'an';
+  /** Empty for what is not counted. */
+  article?: 'a' | 'an' | '';
   /** What is so while the part is not there. */
   without: string;
   /** Further parts that go when this one goes. */
@@ -20,14 +21,15 @@ type Props = {
 export function OptionalPart({ path, noun, article = 'a', without, goWith = [], children }: Props) {
   const dispatch = useDispatch();
   const present = useDesk(({ sheet }) => valueAt(sheet.draft.study, path) !== undefined);
+  const what = [article, noun].filter(Boolean).join(' ');
   const set = (value: unknown, label: string, others: Part[] = []) =>
     dispatch({ type: 'parts', parts: [{ path, value }, ...others], label });
   if (!present)
     return (
       <p className="without">
         <span>{without}</span>
-        <button type="button" className="lnk" onClick={() => set(newParts[path], `add ${article} ${noun}`)}>
-          {`Add ${article} ${noun}`}
+        <button type="button" className="lnk" onClick={() => set(newParts[path], `add ${what}`)}>
+          {`Add ${what}`}
         </button>
       </p>
     );
@@ -35,8 +37,12 @@ export function OptionalPart({ path, noun, article = 'a', without, goWith = [], 
     <>
       {children}
       <p className="remove">
-        <button type="button" className="lnk" onClick={() => set(undefined, `remove the ${noun}`, goWith)}>
-          {`Remove the ${noun}`}
+        <button
+          type="button"
+          className="lnk"
+          onClick={() => set(undefined, `remove ${article ? 'the ' : ''}${noun}`, goWith)}
+        >
+          {`Remove ${article ? 'the ' : ''}${noun}`}
         </button>
       </p>
     </>

@@ -12,7 +12,7 @@ export function StationSection() {
   return (
     <SectionFrame name="station">
       <QuantityFields fields={fields} />
-      <OptionalPart path="station.powerSteps" noun="power sharing plan" without="Power is not shared.">
+      <OptionalPart path="station.powerSteps" noun="power sharing" article="" without="Power is not shared.">
         <h4 className="part">Power sharing</h4>
         <StudyTable path="station.powerSteps" chart={(grid) => <TableChart path="station.powerSteps" grid={grid} />} />
       </OptionalPart>

@@ -3,7 +3,7 @@ import { createDeskStore, type DeskStore } from '../model/desk-store.ts';
 import { examples } from '../model/examples.ts';
 import { readKeptDesk } from '../model/kept-desk.ts';
 import { openLinkedStudy, type OpenReport } from './open-linked-study.ts';
-import { DESK_KEY, UNREADABLE_DESK_KEY } from './use-kept-desk.ts';
+import { setDeskAside, storedDesk } from './desk-storage.ts';
 
 export type LoadedDesk = { store: DeskStore; report: OpenReport | null };
 
@@ -15,11 +15,11 @@ export async function loadDesk(): Promise<LoadedDesk> {
 }
 
 async function keptDesk(): Promise<LoadedDesk> {
-  const text = localStorage.getItem(DESK_KEY);
+  const text = storedDesk();
   const first = async () => createDeskStore(freshDesk(await examples[0]!.load()));
   if (text === null) return { store: await first(), report: null };
   const read = readKeptDesk(text);
   if ('desk' in read) return { store: createDeskStore(read.desk), report: null };
-  localStorage.setItem(UNREADABLE_DESK_KEY, text);
+  setDeskAside(text);
   return { store: await first(), report: { what: 'the study kept in this browser', issues: read.issues } };
 }

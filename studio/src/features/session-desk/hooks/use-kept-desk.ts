@@ -2,10 +2,7 @@ import { useEffect, useState } from 'react';
 import { formatClock } from '../../../lib/format.ts';
 import type { DeskStore } from '../model/desk-store.ts';
 import { keptDeskText } from '../model/kept-desk.ts';
-
-export const DESK_KEY = 'voltiplano.desk';
-/** Where a kept desk goes that this version cannot read, so that nothing is overwritten. */
-export const UNREADABLE_DESK_KEY = 'voltiplano.desk.unreadable';
+import { storedDesk, storeDesk } from './desk-storage.ts';
 
 /** How long the hand rests before the desk is written down. */
 const REST_MS = 250;
@@ -13,9 +10,7 @@ const JUST_NOW_MS = 60_000;
 
 /** Keeps the desk in this browser, and says in words how that went. */
 export function useKeptDesk(store: DeskStore): string {
-  const [status, setStatus] = useState(() =>
-    localStorage.getItem(DESK_KEY) === null ? 'nothing changed yet' : 'in this browser',
-  );
+  const [status, setStatus] = useState(() => (storedDesk() === null ? 'nothing changed yet' : 'in this browser'));
   // Speaks to this browser's storage.
   useEffect(() => {
     let waiting: ReturnType<typeof setTimeout> | undefined;
@@ -24,8 +19,8 @@ export function useKeptDesk(store: DeskStore): string {
       clearTimeout(waiting);
       waiting = undefined;
       clearTimeout(ageing);
-      const done = tryToKeep(keptDeskText(store.get()));
-      setStatus(done ? 'just now' : 'not kept: this browser has no room. Save the study as a file');
+      const done = storeDesk(keptDeskText(store.get()));
+      setStatus(done ? 'just now' : 'not kept: this browser refuses. Save the study as a file');
       const now = new Date();
       if (done)
         ageing = setTimeout(() => setStatus(`at ${formatClock(now.getHours() * 60 + now.getMinutes())}`), JUST_NOW_MS);
@@ -48,13 +43,4 @@ export function useKeptDesk(store: DeskStore): string {
     };
   }, [store]);
   return status;
-}
-
-function tryToKeep(text: string): boolean {
-  try {
-    localStorage.setItem(DESK_KEY, text);
-    return true;
-  } catch {
-    return false;
-  }
 }
