@@ -7,6 +7,8 @@ export type Accuracy = {
   rtol?: number;
   /** Most evaluations of the derivative before the run gives up. */
   maxEvaluations?: number;
+  /** Puts something around the derivative before it is integrated, such as the bench's clock. */
+  around?: (derivative: Derivative) => Derivative;
 };
 
 const DEFAULT_RTOL = 5e-6;
@@ -26,7 +28,7 @@ const USUAL_V = 0.5;
 /** An integrator set up for a pack: tolerances by the size of its states, steps by its shortest time constant. */
 export function makeStepper(derivative: Derivative, pack: PackSystem, accuracy: Accuracy): Stepper {
   const shortest = shortestTimeConstant(pack);
-  return new Stepper(derivative, {
+  return new Stepper(accuracy.around?.(derivative) ?? derivative, {
     ...tolerances(pack, accuracy.rtol ?? DEFAULT_RTOL),
     maxStepS: Math.min(LONGEST_STEP_S, STABLE_STEPS * shortest.seconds),
     firstStepS: Math.min(FIRST_STEP_S, shortest.seconds),
