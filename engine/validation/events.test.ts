@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import type { SessionStudyInput } from '../src/index.ts';
-import { bareStudy, constant, exampleStudies, largePack, referenceStudies, run } from './studies.ts';
+import { bareStudy, constant, exampleStudies, largePack, referenceStudies, run, steadyCoolant } from './studies.ts';
 
 /** Each event stops exactly there: soc and voltage to what 1e-7 s of the session moves, minutes to the last digit. */
 
@@ -157,5 +157,40 @@ describe('ends', () => {
     const full = run(plain((s) => ((s.session.startSoc = 0.8), (s.session.targetSoc = 0.8)))).result;
     expect(full.metrics).toMatchObject({ endReason: 'target', endMin: 0 });
     expect(full.series.tS).toEqual([0]);
+  });
+});
+
+describe('a derating takes over, or hands back, where its band begins, though before it equals the limit in force', () => {
+  const when = (study: ReturnType<typeof plain>, event: string) =>
+    run(study, { rtol: 1e-9 }).result.events.find((one) => one.event === event)!.tS;
+
+  test('hot from pack-current: 12 kW into 5e5 J/K are 24 mK/s, 5 K after 208.3 s', () => {
+    const study = plain((s) => {
+      s.pack.chargeCurrentMaxA = 400;
+      s.cell.r0Milliohm = 0.75;
+      s.strategy.hotDerate = { fromC: 30, toC: 40 };
+    });
+    expect(when(study, 'limit:hot')).toBeCloseTo(5 / 0.024, 1);
+    // To the moment: the ramp's 4 ms deliver a third of the heat of their time.
+    expect(when(study, 'limit:hot')).toBeCloseTo(5 / 0.024 + 0.004 * (2 / 3), 4);
+  });
+
+  test('pack-current from hot: 60 °C on coolant of 20 °C pass 50 °C after τ·ln(40/30)', () => {
+    const study = bareStudy((s) => {
+      s.pack.chargeCurrentMaxA = 400;
+      s.cell.r0Milliohm = 1e-9;
+      s.session.startTempC = 60;
+      steadyCoolant(s, 20, 800);
+      s.strategy.hotDerate = { fromC: 50, toC: 70 };
+    });
+    expect(when(study, 'limit:pack-current')).toBeCloseTo((5e5 / 800) * Math.log(40 / 30), 4);
+  });
+
+  test('inlet from station-current, both of 400 A: 160 W on 4 W/K and 500 J/K pass 20 K after τ·ln(2)', () => {
+    const study = bareStudy((s) => {
+      s.station.currentMaxA = 400;
+      s.inlet = { resistanceMilliohm: 1, currentMaxA: 400, derateFromC: 45, derateToC: 65 };
+    });
+    expect(when(study, 'limit:inlet')).toBeCloseTo(125 * Math.log(2) + 0.004 * (2 / 3), 4);
   });
 });

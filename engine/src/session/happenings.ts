@@ -67,6 +67,15 @@ export function crossing(solution: { look(t: number): void }, value: () => numbe
   return start >= 0 ? from : findRoot(at, from, start, to, at(to), MOMENT_S);
 }
 
+/**
+ * By how much the limit in force allows more than another [A]. Limits may be equal for long (a derating that has not
+ * begun): then the one listed first holds, so the sign says which.
+ */
+function excess(solution: SessionSolution, held: number, other: number): number {
+  const more = allowedBy(solution, held) - allowedBy(solution, other);
+  return more !== 0 ? more : other < held ? Number.MIN_VALUE : -Number.MIN_VALUE;
+}
+
 /** Where the limit in force gives way to another: the one that binds at `to`, unless a third comes first. */
 function handOver(solution: SessionSolution, held: number, last: number, from: number, to: number): Happening {
   const { charge } = solution.system;
@@ -74,7 +83,7 @@ function handOver(solution: SessionSolution, held: number, last: number, from: n
   let code = last;
   for (let round = 0; round < limitCodes.length; round++) {
     const other = code;
-    t = crossing(solution, () => allowedBy(solution, held) - allowedBy(solution, other), from, t);
+    t = crossing(solution, () => excess(solution, held, other), from, t);
     solution.look(t);
     if (charge.code === held || charge.code === other) break;
     code = charge.code;
