@@ -2,7 +2,7 @@ import * as Comlink from 'comlink';
 import type { SessionStudyInput } from '../src/index.ts';
 import { unpackAnswer } from './pack-series.ts';
 import type { Outcome, RunOptions, RunSummary, SessionAnswer } from './protocol.ts';
-import { asError, WorkerPool, type Ticket } from './worker-pool.ts';
+import { asError, Cancelled, WorkerPool, type Ticket } from './worker-pool.ts';
 
 const CHUNK = 8;
 
@@ -54,7 +54,7 @@ function latestOf(run: SessionClient['run']): SessionClient['latest'] {
     new Promise((resolve, reject) => {
       const waiting: Waiting = {
         start: () => void run(study, options).result.then(resolve, reject).finally(done),
-        giveWay: () => reject(asError({ name: 'Cancelled', message: 'A newer run took its place.' })),
+        giveWay: () => reject(new Cancelled('A newer run took its place.')),
       };
       if (!busy) return begin(waiting);
       next?.giveWay();

@@ -5,8 +5,8 @@ import type { Outcome, SessionWorker, WorkerFailure } from './protocol.ts';
 /** A job that was called off before it ended. */
 export class Cancelled extends Error {
   override readonly name = 'Cancelled';
-  constructor() {
-    super('The run was cancelled.');
+  constructor(message = 'The run was cancelled.') {
+    super(message);
   }
 }
 
@@ -44,6 +44,7 @@ export class WorkerPool {
   }
 
   run<T>(work: Work<T>): Ticket<T> {
+    if (this.closed) return { result: Promise.reject(new Cancelled()), cancel: () => {} };
     let job: Job<T> | null = null;
     const result = new Promise<T>((resolve, reject) => {
       job = { work, resolve, reject };
