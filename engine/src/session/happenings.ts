@@ -14,6 +14,11 @@ export const MOMENT_S = 1e-7;
 /** A voltage-ledge counts as reached this near [V] (engine/MODEL.md, section 6). */
 export const REACHED_V = 1e-9;
 
+/** Two limits that stand this near each other differ by rounding [share of the current]. */
+const ROUNDING = 1e-11;
+/** Stands for a difference of 0 A with a sign: below any real one, and far enough from 0 to be halved often. */
+const TIE_A = 1e-100;
+
 /** Limits under which the end current ends a session. */
 const ENDING = new Set([LIMIT['cell-voltage'], LIMIT.taper, LIMIT.anode]);
 
@@ -34,7 +39,7 @@ export function firstHappening(
 ): Happening | null {
   solution.look(to);
   const { system } = solution;
-  const { code } = system.charge;
+  const code = bindingNow(solution, held);
   const climbs = overLedge(system) >= 0;
   const spent = endsAtCutoff(held) && allowedBy(solution, held) <= cutoffA;
   // Nearly every look ends here, before any closure is made.
@@ -47,6 +52,15 @@ export function firstHappening(
   return found.reduce((first, one) => (one.t < first.t ? one : first));
 }
 
+/** The limit that binds at the moment looked at; the one in force stays while another allows the same. */
+function bindingNow(solution: SessionSolution, held: number): number {
+  const { code, current } = solution.system.charge;
+  if (code === held) return held;
+  const more = allowedBy(solution, held) - allowedBy(solution, code);
+  const takesOver = more > ROUNDING * (1 + Math.abs(current)) || (more === 0 && code < held);
+  return takesOver ? code : held;
+}
+
 /** How far the highest cell voltage stands above the next voltage-ledge [V]; −∞ where there is none. */
 function overLedge({ pack, charge, taper }: SessionSystem): number {
   return taper.endV < Infinity ? pack.highestCellV(charge.current) - (taper.endV - REACHED_V) : -Infinity;
@@ -57,14 +71,16 @@ export function allowedBy({ system, at, seen }: SessionSolution, code: number): 
   return system.charge.allowedBy(code, at, seen[system.pack.layout.inlet]);
 }
 
-/** First moment at which `value`, read after a look, is no longer below 0; it is not below 0 at `to`. */
+/** First moment at which `value`, read after a look, is no longer below 0; `to` if it is not so before. */
 export function crossing(solution: { look(t: number): void }, value: () => number, from: number, to: number): number {
   const at = (t: number) => {
     solution.look(t);
     return value();
   };
   const start = at(from);
-  return start >= 0 ? from : findRoot(at, from, start, to, at(to), MOMENT_S);
+  if (start >= 0) return from;
+  const end = at(to);
+  return end >= 0 ? findRoot(at, from, start, to, end, MOMENT_S) : to;
 }
 
 /**
@@ -73,7 +89,7 @@ export function crossing(solution: { look(t: number): void }, value: () => numbe
  */
 function excess(solution: SessionSolution, held: number, other: number): number {
   const more = allowedBy(solution, held) - allowedBy(solution, other);
-  return more !== 0 ? more : other < held ? Number.MIN_VALUE : -Number.MIN_VALUE;
+  return more !== 0 ? more : other < held ? TIE_A : -TIE_A;
 }
 
 /** Where the limit in force gives way to another: the one that binds at `to`, unless a third comes first. */
