@@ -39,11 +39,12 @@ export class PackSystem {
   readonly rc25: Float64Array;
   readonly tau: Float64Array;
   readonly inletOhm: number;
+  /** Heat capacity of the inlet [J/K] and its conductance to the air [W/K]. */
+  readonly inletJPerK: number;
+  readonly inletToAir: number;
   readonly share: number;
 
   private readonly activation: number;
-  private readonly inletJPerK: number;
-  private readonly inletToAir: number;
   private readonly ceilingV: number;
   private readonly marginV: number;
   private readonly guardAnode: boolean;

@@ -22,5 +22,9 @@ function candidates(pack: PackSystem): TimeConstant[] {
     seconds: coolant.loopJPerK / coolant.flowWPerK,
     name: 'the coolant loop’s volume against its flow (thermal.coolant)',
   };
-  return [...pairs, ...nodes, loop];
+  const inlet = {
+    seconds: pack.inletJPerK / pack.inletToAir,
+    name: 'the inlet’s heat capacity (inlet.heatCapacityJPerK)',
+  };
+  return [...pairs, ...nodes, loop, inlet];
 }

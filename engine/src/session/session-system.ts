@@ -53,7 +53,21 @@ export class SessionSystem {
     const sum = dy[integrals + 9] + dy[integrals + 12] + pack.coolant.outC + y[inlet] + stationCurrent;
     if (!(sum - sum === 0)) throw new NotFinite();
   };
+
+  /** The error for a session that cannot go on from a state, with the reason. */
+  stuckAt(t: number, y: ArrayLike<number>): Error {
+    this.at(t, y);
+    const { restV, ohm, auxiliaryW, soc } = this.pack;
+    if (restV + ohm * this.charge.current > COLLAPSED * restV) return inconsistent(t);
+    const message =
+      `Stopped at ${(t / 60).toFixed(1)} min: the station gives less than the ${(auxiliaryW / 1000).toFixed(1)} kW of auxiliaries, ` +
+      `and the pack, at ${(100 * soc).toFixed(0).replace('-', '−')} %, can give the rest no longer.`;
+    return studyError('INCONSISTENT', 'session.hotelW', 'auxiliaries-above-pack', message);
+  }
 }
+
+/** At the most power a pack can give its voltage is half of that at rest; this near it there is no way on. */
+const COLLAPSED = 0.6;
 
 /** The error for a run that leaves the numbers' range however short its steps. */
 export function inconsistent(t: number): Error {

@@ -135,7 +135,7 @@ class SessionSimulation {
     } catch (error) {
       if (!(error instanceof NotFinite)) throw error;
       if (this.stepper.shorten()) return;
-      throw inconsistent(this.t);
+      throw this.system.stuckAt(this.t, this.y);
     }
     if (nextPowerS < this.endS) this.jump(() => this.takePowerStep());
     else this.finalRow('maxMin');
