@@ -89,7 +89,8 @@ describe('slew (IEC 61851-23:2014, memory)', () => {
     });
     const { series, events } = run(study, { everyS: 1 }).result;
     series.tS.forEach((t, row) => {
-      if (series.limit[row] === 'station-ramp') expect(series.stationCurrentA[row]).toBeCloseTo(20 * t, 9);
+      // The hand-over's moment is found to 1e-7 s.
+      if (series.limit[row] === 'station-ramp') expect(series.stationCurrentA[row]).toBeCloseTo(20 * t, 5);
     });
     // 400 A and the auxiliaries' 2 kW at 374 V.
     expect(events.find(({ event }) => event === 'limit:taper')!.tS).toBeCloseTo((400 + 2000 / 374) / 20, 6);
