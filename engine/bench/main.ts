@@ -1,6 +1,7 @@
 /**
  * What a session costs. `npm run bench` times two sessions of 47 minutes with ledges, two RC pairs, two nodes and every guard on,
- * beside a C program where one is installed; `-- --browser` adds a worker in Chromium; `-- --json FILE` writes the numbers.
+ * beside a C program where one is installed; `-- --browser` adds a worker in Chromium; `-- --json FILE` writes the numbers;
+ * `-- --turns 40` takes more turns than 15.
  */
 import { writeFileSync } from 'node:fs';
 import { parseArgs } from 'node:util';
@@ -10,11 +11,15 @@ import { median, timeDerivative, timeRuns, warmUp, type Measured } from './measu
 import { referenceStudies, timed, timedStudy, type Timed } from './studies.ts';
 import { compareSwitchOvers } from './switch-overs.ts';
 
-const TURNS = 15;
 const RUNS_A_TURN = 20;
 const DERIVATIVE_RUNS = 60;
 
-const { values: options } = parseArgs({ options: { json: { type: 'string' }, browser: { type: 'boolean' } } });
+const { values: options } = parseArgs({
+  options: { json: { type: 'string' }, browser: { type: 'boolean' }, turns: { type: 'string', default: '15' } },
+});
+
+const turns = Number(options.turns);
+if (!(turns >= 1)) throw new Error(`--turns must be a number from 1, but is ${options.turns}`);
 
 const studies = { b1: timedStudy('b1'), b12: timedStudy('b12') };
 const anchor = findAnchor();
@@ -23,7 +28,7 @@ for (const name of timed) warmUp(studies[name]);
 // Turn by turn, so that whatever else the machine does weighs on both alike.
 const ours: Record<Timed, number[]> = { b1: [], b12: [] };
 const anchors: Record<Timed, number[]> = { b1: [], b12: [] };
-for (let turn = 0; turn < TURNS; turn++) {
+for (let turn = 0; turn < turns; turn++) {
   for (const name of timed) {
     ours[name].push(median(timeRuns(studies[name], RUNS_A_TURN)));
     if ('time' in anchor) anchors[name].push(anchor.time(name));
@@ -31,7 +36,7 @@ for (let turn = 0; turn < TURNS; turn++) {
 }
 
 const measured = { b1: measure('b1'), b12: measure('b12') };
-console.log(`\nmedian of ${TURNS} turns of ${RUNS_A_TURN} runs, default accuracy, full 10 s series, metrics, ledgers`);
+console.log(`\nmedian of ${turns} turns of ${RUNS_A_TURN} runs, default accuracy, full 10 s series, metrics, ledgers`);
 for (const name of timed) print(name, measured[name]);
 if ('skipped' in anchor) console.log(`C program on CVODES: skipped, ${anchor.skipped}`);
 else for (const name of timed) printRatio(name);
