@@ -1,18 +1,19 @@
 import type { ReactNode } from 'react';
 import { TitleBlock } from '../../../components/title-block.tsx';
-import { useDesk, useDispatch } from '../hooks/use-desk.ts';
+import { useDesk, useDeskStore, useDispatch } from '../hooks/use-desk.ts';
+import { useKeptDesk } from '../hooks/use-kept-desk.ts';
 import { changesOf } from '../model/derived.ts';
 
-type Props = { kept: string; actions: ReactNode };
+type Props = { actions: ReactNode };
 
 /** Title, baseline, how much has changed against it, and whether it is kept. */
-export function DeskTitleBlock({ kept, actions }: Props) {
+export function DeskTitleBlock({ actions }: Props) {
   const baseline = useDesk(({ sheet }) => sheet.baseline);
   const changed = useDesk(({ sheet }) => changesOf(sheet).length);
   const cells = [
     { label: 'Baseline', value: <BaselineCell title={baseline && (baseline.title || 'untitled')} /> },
     { label: 'Changed', value: baseline ? `${changed} ${changed === 1 ? 'input' : 'inputs'}` : 'no baseline' },
-    { label: 'Kept', value: <span role="status">{kept}</span> },
+    { label: 'Kept', value: <KeptWords /> },
   ];
   return <TitleBlock kind="Session study" title={<TitleField />} cells={cells} actions={actions} />;
 }
@@ -43,6 +44,10 @@ function TitleField() {
       />
     </>
   );
+}
+
+function KeptWords() {
+  return <span role="status">{useKeptDesk(useDeskStore())}</span>;
 }
 
 function BaselineCell({ title }: { title: string | null }) {

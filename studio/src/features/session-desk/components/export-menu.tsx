@@ -2,7 +2,7 @@ import { useState } from 'react';
 import { exportDrawing, type ExportFormat } from '../../../charts/chart-export.ts';
 import { Button } from '../../../components/button.tsx';
 import { Menu, MenuHeading, MenuItem } from '../../../components/menu.tsx';
-import { useRun } from '../hooks/run-context.ts';
+import { useRun, useRuns } from '../hooks/run-context.ts';
 import { downloadText } from '../hooks/use-study-files.ts';
 import { resultFile, seriesFile } from '../model/export-files.ts';
 import type { Drawings } from './results-panel.tsx';
@@ -13,20 +13,26 @@ type DrawingPart = (typeof PARTS)[number];
 
 /** The results as tables and drawings. */
 export function ExportMenu({ stripsRef, ledgerRef }: Drawings) {
-  const { answer, study } = useRun();
+  const runs = useRuns();
+  const hasAnswer = useRun((run) => run.answer !== null);
   const [failed, setFailed] = useState(false);
-  if (!answer || !study) return <Button unavailable="No result yet">Export</Button>;
+  if (!hasAnswer) return <Button unavailable="No result yet">Export</Button>;
+  const download = (fileOf: typeof seriesFile) => {
+    const { answer, study } = runs.get();
+    if (answer && study) downloadText(fileOf(answer.result, study));
+  };
   const draw = async (part: DrawingPart, format: ExportFormat) => {
     const element = (part === 'strips' ? stripsRef : ledgerRef).current;
     if (!element) return;
     setFailed(false);
-    await exportDrawing(element, { title: study.title ?? 'Session', part, format }).catch(() => setFailed(true));
+    const title = runs.get().study?.title ?? 'Session';
+    await exportDrawing(element, { title, part, format }).catch(() => setFailed(true));
   };
   return (
     <span className="study-menu">
       <Menu trigger={<Button>Export</Button>} align="end">
-        <MenuItem onSelect={() => downloadText(seriesFile(answer.result, study))}>Series as CSV</MenuItem>
-        <MenuItem onSelect={() => downloadText(resultFile(answer.result, study))}>Result as JSON</MenuItem>
+        <MenuItem onSelect={() => download(seriesFile)}>Series as CSV</MenuItem>
+        <MenuItem onSelect={() => download(resultFile)}>Result as JSON</MenuItem>
         {PARTS.map((part) => (
           <DrawingItems key={part} part={part} onDraw={(format) => void draw(part, format)} />
         ))}

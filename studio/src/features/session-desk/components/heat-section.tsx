@@ -1,9 +1,10 @@
-import type { ThermalAnalysis } from '@voltiplano/engine';
 import { useUnits } from '../../../lib/units.ts';
+import { useAnswered } from '../hooks/run-context.ts';
 import { heatWords } from '../model/heat-words.ts';
 
 /** How fast the pack's thermal network is, and where it would settle. */
-export function HeatSection({ thermal }: { thermal: ThermalAnalysis }) {
+export function HeatSection() {
+  const { thermal } = useAnswered().answer;
   const units = useUnits();
   return (
     <section className="heat" aria-labelledby="heat-title">

@@ -5,11 +5,13 @@ import { useRun } from '../hooks/run-context.ts';
 
 /** Beside an input that sets a limit: the limit's swatch, and for how long it held the session. */
 export function HeldNote({ code }: { code: LimitCode }) {
-  const { answer, study } = useRun();
+  const words = useRun(({ answer, study }) =>
+    answer ? heldText(code, answer.result.metrics, study?.strategy.anodeMarginMv) : '\u00a0',
+  );
   return (
     <span className="held">
       <LimitSwatch code={code} />
-      <span>{answer ? heldText(code, answer.result.metrics, study?.strategy.anodeMarginMv) : ' '}</span>
+      <span>{words}</span>
     </span>
   );
 }

@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { useDesk, useDispatch } from '../hooks/use-desk.ts';
 import { CellSection } from './cell-section.tsx';
 import { CoolingSection } from './cooling-section.tsx';
@@ -8,7 +9,7 @@ import { TaperSection } from './taper-section.tsx';
 import { BoostSection, InletSection, PackSection } from './vehicle-sections.tsx';
 
 /** Everything that describes a session, from the station to the cell. */
-export function InputsPanel() {
+export const InputsPanel = memo(function InputsPanel() {
   return (
     <aside className="ins" aria-label="Inputs">
       <div className="ins-head">
@@ -29,7 +30,7 @@ export function InputsPanel() {
       </div>
     </aside>
   );
-}
+});
 
 function UndoActions() {
   const dispatch = useDispatch();

@@ -1,11 +1,9 @@
-import type { SessionStudyInput } from '@voltiplano/engine';
-import type { SessionAnswer } from '@voltiplano/engine/worker';
 import type { RefObject } from 'react';
 import { LedgerFlow } from '../../../charts/ledger-flow.tsx';
 import { Caution } from '../../../components/caution.tsx';
 import { HeadlineNumbers } from '../../../components/headline-numbers.tsx';
 import { useUnits } from '../../../lib/units.ts';
-import { useRun } from '../hooks/run-context.ts';
+import { useAnswered, useRun } from '../hooks/run-context.ts';
 import { sessionHeadlines } from '../model/session-headlines.ts';
 import { HeatSection } from './heat-section.tsx';
 import { RunFailureNotice, WaitingInputs } from './run-notices.tsx';
@@ -19,12 +17,20 @@ export type Drawings = { stripsRef: Drawing; ledgerRef: Drawing };
 
 /** Sentence, numbers, strips, ledger, heat: what the session does, in words first. */
 export function ResultsPanel({ stripsRef, ledgerRef }: Drawings) {
-  const { answer, study } = useRun();
+  const hasAnswer = useRun((run) => run.answer !== null);
   return (
     <section className="res" aria-label="Results">
       <RunFailureNotice />
-      {answer && study ? (
-        <Results answer={answer} study={study} stripsRef={stripsRef} ledgerRef={ledgerRef} />
+      {hasAnswer ? (
+        <>
+          <div className="res-head">
+            <WaitingInputs />
+            <Headlines />
+          </div>
+          <StripsSection drawing={stripsRef} />
+          <LedgerSection drawing={ledgerRef} />
+          <HeatSection />
+        </>
       ) : (
         <p className="say waiting">Running the session.</p>
       )}
@@ -36,29 +42,29 @@ export function ResultsPanel({ stripsRef, ledgerRef }: Drawings) {
   );
 }
 
-type ResultsProps = Drawings & { answer: SessionAnswer; study: SessionStudyInput };
-
-function Results({ answer, study, stripsRef, ledgerRef }: ResultsProps) {
-  const { baseline } = useRun();
+function Headlines() {
+  const { answer, study } = useAnswered();
+  const baseline = useRun((run) => run.baseline);
   const units = useUnits();
   return (
     <>
-      <div className="res-head">
-        <WaitingInputs />
-        <SessionSentence result={answer.result} />
-        <HeadlineNumbers numbers={sessionHeadlines(answer.result, study, units, baseline?.result ?? null)} />
-      </div>
-      <StripsSection answer={answer} study={study} drawing={stripsRef} />
-      <section aria-labelledby="ledger-title">
-        <div className="bar">
-          <h2 id="ledger-title">Ledger</h2>
-          <span className="about">
-            energy from the grid to the cells; each loss is one ledge, heights to scale above the break
-          </span>
-        </div>
-        <LedgerFlow ref={ledgerRef} ledger={answer.result.energyLedger} />
-      </section>
-      <HeatSection thermal={answer.thermal} />
+      <SessionSentence result={answer.result} />
+      <HeadlineNumbers numbers={sessionHeadlines(answer.result, study, units, baseline?.result ?? null)} />
     </>
+  );
+}
+
+function LedgerSection({ drawing }: { drawing: Drawing }) {
+  const { answer } = useAnswered();
+  return (
+    <section aria-labelledby="ledger-title">
+      <div className="bar">
+        <h2 id="ledger-title">Ledger</h2>
+        <span className="about">
+          energy from the grid to the cells; each loss is one ledge, heights to scale above the break
+        </span>
+      </div>
+      <LedgerFlow ref={drawing} ledger={answer.result.energyLedger} />
+    </section>
   );
 }

@@ -1,14 +1,16 @@
 import { Notice } from '../../../components/notice.tsx';
 import { useDesk } from '../hooks/use-desk.ts';
-import { useRun } from '../hooks/run-context.ts';
+import { useRun, useRuns } from '../hooks/run-context.ts';
 import { issuesOf } from '../model/derived.ts';
 import { labelOfPath } from '../model/issue-text.ts';
 
 /** Above the results: why the present study has none. */
 export function RunFailureNotice() {
-  const { failure, tryAgain, answer } = useRun();
+  const { tryAgain } = useRuns();
+  const failure = useRun((run) => run.failure);
+  const hasAnswer = useRun((run) => run.answer !== null);
   if (!failure) return null;
-  const kept = answer ? 'What follows is of the last study that ran.' : '';
+  const kept = hasAnswer ? 'What follows is of the last study that ran.' : '';
   if (failure.kind === 'refused')
     return (
       <Notice kind="stop">

@@ -1,10 +1,9 @@
 import { useEffect, useMemo, useRef, useState } from 'react';
-import { DeskContext, useDesk } from '../hooks/use-desk.ts';
+import { DeskContext } from '../hooks/use-desk.ts';
 import type { LoadedDesk } from '../hooks/load-desk.ts';
 import { RunContext } from '../hooks/run-context.ts';
+import { useDeskRuns } from '../hooks/use-desk-runs.ts';
 import { useDeskShortcuts } from '../hooks/use-desk-shortcuts.ts';
-import { useKeptDesk } from '../hooks/use-kept-desk.ts';
-import { useSessionRun } from '../hooks/use-session-run.ts';
 import { useStudyFiles } from '../hooks/use-study-files.ts';
 import { DeskActions } from './desk-actions.tsx';
 import { DeskTitleBlock } from './desk-title-block.tsx';
@@ -15,19 +14,19 @@ import { ShortcutsDialog } from './shortcuts-dialog.tsx';
 
 /** One desk with its study, its results and its files. */
 export function SessionDesk({ store, report }: LoadedDesk) {
+  const runs = useDeskRuns(store);
   return (
     <DeskContext value={store}>
-      <Desk store={store} report={report} />
+      <RunContext value={runs}>
+        <Desk store={store} report={report} />
+      </RunContext>
     </DeskContext>
   );
 }
 
+/** Reads nothing of the study or its results itself: each part below is drawn again when what it shows changes. */
 function Desk({ store, report }: LoadedDesk) {
-  const study = useDesk(({ sheet }) => sheet.draft.study);
-  const baseline = useDesk(({ sheet }) => sheet.baseline);
-  const run = useSessionRun(study, baseline);
   const files = useStudyFiles(store, report);
-  const kept = useKeptDesk(store);
   const picker = useRef<HTMLInputElement>(null);
   const stripsRef = useRef<HTMLDivElement>(null);
   const ledgerRef = useRef<HTMLDivElement>(null);
@@ -40,9 +39,8 @@ function Desk({ store, report }: LoadedDesk) {
   useDeskShortcuts(store, commands);
   useLinksInTheAddress(files.openLink);
   return (
-    <RunContext value={run}>
+    <>
       <DeskTitleBlock
-        kept={kept}
         actions={
           <DeskActions
             files={files}
@@ -56,7 +54,7 @@ function Desk({ store, report }: LoadedDesk) {
       <DeskSides stripsRef={stripsRef} ledgerRef={ledgerRef} />
       <ShortcutsDialog open={showsKeys} onOpenChange={setShowsKeys} />
       <OpenReportDialog report={files.report} onClose={files.forgetReport} />
-    </RunContext>
+    </>
   );
 }
 

@@ -1,16 +1,15 @@
-import { useMemo, useState, type RefObject } from 'react';
+import { memo, useMemo, useState, type RefObject } from 'react';
 import { SessionStrips, type StrategyBounds } from '../../../charts/session-strips.tsx';
 import type { TaperTable } from '../../../charts/taper-line.ts';
 import { stripKeys, type StripKey } from '../../../charts/strip-specs.ts';
 import { WordSwitch } from '../../../components/word-switch.tsx';
 import type { SessionStudyInput } from '@voltiplano/engine';
-import type { SessionAnswer } from '@voltiplano/engine/worker';
 import { LimitMinutes } from './limit-minutes.tsx';
 import { useDesk, useDispatch } from '../hooks/use-desk.ts';
-import { useRun } from '../hooks/run-context.ts';
+import { useAnswered, useRun } from '../hooks/run-context.ts';
 import { filledOf, issuesOf } from '../model/derived.ts';
 
-type Props = { answer: SessionAnswer; study: SessionStudyInput; drawing: RefObject<HTMLDivElement | null> };
+type Props = { drawing: RefObject<HTMLDivElement | null> };
 
 const AXES = [
   { value: 'time' as const, label: 'over time' },
@@ -18,11 +17,13 @@ const AXES = [
 ];
 
 /** The stacked charts over one shared axis, with what they show and what they leave out. */
-export function StripsSection({ answer, study, drawing }: Props) {
-  const dispatch = useDispatch();
+export function StripsSection({ drawing }: Props) {
+  const { answer, study } = useAnswered();
+  const baseline = useRun((run) => run.baseline);
+  const working = useRun((run) => run.isWorking);
+  const failed = useRun((run) => run.failure !== null);
   const { axis, hiddenStrips } = useDesk((state) => state.view);
   const waits = useDesk(({ sheet }) => issuesOf(sheet.draft).length > 0);
-  const { isWorking, baseline, failure } = useRun();
   const [cursor, setCursor] = useState<number | null>(null);
   const hidden = useMemo(() => new Set(hiddenStrips as StripKey[]), [hiddenStrips]);
   const taper = useMemo(() => taperTableOf(study), [study]);
@@ -31,12 +32,7 @@ export function StripsSection({ answer, study, drawing }: Props) {
     <section aria-labelledby="strips-title">
       <div className="bar">
         <h2 id="strips-title">Strips</h2>
-        <WordSwitch
-          label="Axis of the strips"
-          value={axis}
-          options={AXES}
-          onChange={(chosen) => dispatch({ type: 'view', view: { axis: chosen } })}
-        />
+        <AxisSwitch />
         <StripKeyLine hasBaseline={baseline !== null} hasTaper={taper !== null} />
         <StripToggles />
       </div>
@@ -48,8 +44,8 @@ export function StripsSection({ answer, study, drawing }: Props) {
         hidden={hidden}
         cursor={cursor}
         onCursor={setCursor}
-        stale={isWorking || waits || failure !== null}
-        working={isWorking}
+        stale={working || waits || failed}
+        working={working}
         taper={taper}
         bounds={bounds}
       />
@@ -57,6 +53,19 @@ export function StripsSection({ answer, study, drawing }: Props) {
     </section>
   );
 }
+
+const AxisSwitch = memo(function AxisSwitch() {
+  const dispatch = useDispatch();
+  const axis = useDesk((state) => state.view.axis);
+  return (
+    <WordSwitch
+      label="Axis of the strips"
+      value={axis}
+      options={AXES}
+      onChange={(chosen) => dispatch({ type: 'view', view: { axis: chosen } })}
+    />
+  );
+});
 
 /** Only tapers over soc have a line on the strips. */
 function taperTableOf(study: SessionStudyInput): TaperTable | null {
@@ -73,8 +82,10 @@ function boundsOf({ strategy, cell }: SessionStudyInput): StrategyBounds {
   };
 }
 
+type KeyProps = { hasBaseline: boolean; hasTaper: boolean };
+
 /** What the lines mean. */
-function StripKeyLine({ hasBaseline, hasTaper }: { hasBaseline: boolean; hasTaper: boolean }) {
+const StripKeyLine = memo(function StripKeyLine({ hasBaseline, hasTaper }: KeyProps) {
   return (
     <p className="key">
       <span>
@@ -101,10 +112,10 @@ function StripKeyLine({ hasBaseline, hasTaper }: { hasBaseline: boolean; hasTape
       )}
     </p>
   );
-}
+});
 
 /** One word per strip; pressed while it is shown. */
-function StripToggles() {
+const StripToggles = memo(function StripToggles() {
   const dispatch = useDispatch();
   const hidden = useDesk((state) => state.view.hiddenStrips);
   const toggle = (key: StripKey) =>
@@ -121,4 +132,4 @@ function StripToggles() {
       ))}
     </div>
   );
-}
+});

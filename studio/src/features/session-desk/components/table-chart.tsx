@@ -11,14 +11,15 @@ type Props = { path: string; grid: Grid };
 /** A small drawing of a table, in shown units, read between its rows as the engine reads it. */
 export function TableChart({ path, grid }: Props) {
   const { temperatureUnit } = useUnits();
-  const { strategy, session } = useDesk(({ sheet }) => sheet.draft.study);
-  const spec = tableAt(path, strategy.taper);
+  const taper = useDesk(({ sheet }) => sheet.draft.study.strategy.taper);
+  const maxMin = useDesk(({ sheet }) => sheet.draft.study.session.maxMin);
+  const spec = tableAt(path, taper);
   if (!spec || spec.columns.length !== 2 || path === 'strategy.taper') return null;
   const shown = grid.map((row) =>
     row.map((cell, j) => (typeof cell === 'number' ? toShown(cell, spec.columns[j]!.measure, temperatureUnit) : cell)),
   );
-  const end = path === 'station.powerSteps' ? (session.maxMin ?? 60) : 100;
-  const curve = tableCurve(shown, readingOf(path, strategy.taper.shape), end);
+  const end = path === 'station.powerSteps' ? (maxMin ?? 60) : 100;
+  const curve = tableCurve(shown, readingOf(path, taper.shape), end);
   const [x, y] = spec.columns;
   return (
     <div className="table-chart">

@@ -2,7 +2,7 @@ import { useMemo } from 'react';
 import { ChoiceField } from '../../../components/fields/choice-field.tsx';
 import { WordSwitch } from '../../../components/word-switch.tsx';
 import { formatNumber } from '../../../lib/format.ts';
-import { useDesk, useDispatch } from '../hooks/use-desk.ts';
+import { useDesk, useDeskStore, useDispatch } from '../hooks/use-desk.ts';
 import { useRun } from '../hooks/run-context.ts';
 import { ledgeMinutes } from '../model/ledge-minutes.ts';
 import { taperInShape, taperShapes, type TaperUnit } from '../model/taper-shapes.ts';
@@ -18,10 +18,9 @@ const UNITS: { value: TaperUnit }[] = [{ value: 'A' }, { value: 'C' }, { value: 
 
 export function TaperSection() {
   const dispatch = useDispatch();
-  const { strategy, pack } = useDesk(({ sheet }) => sheet.draft.study);
-  const { taper } = strategy;
+  const desk = useDeskStore();
+  const taper = useDesk(({ sheet }) => sheet.draft.study.strategy.taper);
   const path = taperTable(taper)?.path;
-  const did = useLedgeColumn();
   const put = (value: typeof taper, label: string) =>
     dispatch({ type: 'parts', parts: [{ path: 'strategy.taper', value }], label });
   return (
@@ -31,21 +30,28 @@ export function TaperSection() {
         label="Shape"
         value={taper.shape}
         options={SHAPES}
-        onChange={(shape) =>
-          put(taperInShape(taper, shape, strategy.cellVoltageCeilingV, pack.chargeCurrentMaxA), 'taper shape')
-        }
+        onChange={(shape) => {
+          const { strategy, pack } = desk.get().sheet.draft.study;
+          put(taperInShape(taper, shape, strategy.cellVoltageCeilingV, pack.chargeCurrentMaxA), 'taper shape');
+        }}
       />
       <div className="note">
         <HeldNote code="taper" />
       </div>
       {path && taper.shape !== 'none' && (
         <>
-          <StudyTable path={path} did={did} chart={(grid) => <TableChart path={path} grid={grid} />} />
+          <LedgeTable path={path} />
           <UnitChoice unit={taper.unit} />
         </>
       )}
     </SectionFrame>
   );
+}
+
+/** The taper's table, which also says how long each ledge held the current. */
+function LedgeTable({ path }: { path: string }) {
+  const did = useLedgeColumn();
+  return <StudyTable path={path} did={did} chart={(grid) => <TableChart path={path} grid={grid} />} />;
 }
 
 /** A taper's unit; choosing another keeps the numbers, and says so. */
@@ -64,7 +70,8 @@ function UnitChoice({ unit }: { unit: TaperUnit }) {
 
 /** The last column of the taper's table: how long each ledge held the current. */
 function useLedgeColumn() {
-  const { answer, study } = useRun();
+  const answer = useRun((run) => run.answer);
+  const study = useRun((run) => run.study);
   return useMemo(() => {
     if (!answer || !study || study.strategy.taper.shape === 'map') return undefined;
     const minutes = ledgeMinutes(answer.result, study.strategy.taper);

@@ -1,31 +1,36 @@
-import type { StudyIssue } from '@voltiplano/engine';
+import type { SessionStudyInput, StudyIssue } from '@voltiplano/engine';
 import type { Grid } from '../../../components/fields/grid.ts';
 import type { GridEdit } from '../../../components/fields/table-edits.ts';
 import type { CellIssue } from '../../../components/fields/table-issues.tsx';
 import type { TemperatureUnit } from '../../../lib/units.ts';
 import { issuesOf } from '../model/derived.ts';
-import { gridAt } from '../model/draft.ts';
 import { issueSentence } from '../model/issue-text.ts';
 import { isWithin, valueAt } from '../model/study-path.ts';
 import { cellMeasure, cellOfPath, tableAt, type TableSpec } from '../model/table-specs.ts';
 import { useDesk, useDispatch } from './use-desk.ts';
 
+type Taper = SessionStudyInput['strategy']['taper'];
+
 /** Everything the editor of one table shows; undefined where no such table is in the study. */
 export function useStudyTable(path: string, temperature: TemperatureUnit) {
   const dispatch = useDispatch();
-  const { draft, baseline } = useDesk((state) => state.sheet);
-  const spec = tableAt(path, draft.study.strategy.taper);
+  const taper = useDesk(({ sheet }) => sheet.draft.study.strategy.taper);
+  const value = useDesk(({ sheet }) => valueAt(sheet.draft.study, path));
+  const waiting = useDesk(({ sheet }) => sheet.draft.pending[path]);
+  const baseline = useDesk(({ sheet }) => sheet.baseline);
+  const allIssues = useDesk(({ sheet }) => issuesOf(sheet.draft));
+  const spec = tableAt(path, taper);
   if (!spec) return undefined;
-  const grid = gridAt(draft, path);
-  const before = baseline && isSameKind(draft.study, baseline, path) ? spec.toGrid(valueAt(baseline, path)) : null;
-  const found = issuesOf(draft).filter((issue) => isWithin(issue.path, path));
+  const grid = Array.isArray(waiting) ? waiting : spec.toGrid(value);
+  const before = baseline && isSameKind(taper, baseline, path) ? spec.toGrid(valueAt(baseline, path)) : null;
+  const found = allIssues.filter((issue) => isWithin(issue.path, path));
   const { issues, general } = placed(found, spec, grid, temperature);
   return {
     spec,
     grid,
     issues,
     general,
-    meanwhile: path in draft.pending ? 'The curves still use the last good table.' : undefined,
+    meanwhile: waiting !== undefined ? 'The curves still use the last good table.' : undefined,
     isMoved: (row: number, column: number) => before !== null && grid[row]?.[column] !== before[row]?.[column],
     onEdit: ({ grid: next, label, typingAt }: GridEdit) =>
       dispatch({ type: 'entry', path, entry: next, label, ...(typingAt ? { typingAt: `${path} ${typingAt}` } : {}) }),
@@ -34,10 +39,10 @@ export function useStudyTable(path: string, temperature: TemperatureUnit) {
 }
 
 /** A table is compared with the baseline's only where both hold the same kind of numbers. */
-function isSameKind(study: object, baseline: object, path: string): boolean {
+function isSameKind(taper: Taper, baseline: SessionStudyInput, path: string): boolean {
   if (!path.startsWith('strategy.taper')) return true;
-  const kind = (one: object) => [valueAt(one, 'strategy.taper.shape'), valueAt(one, 'strategy.taper.unit')].join(' ');
-  return kind(study) === kind(baseline);
+  const kind = (one: Taper) => (one.shape === 'none' ? one.shape : `${one.shape} ${one.unit}`);
+  return kind(taper) === kind(baseline.strategy.taper);
 }
 
 /** Sorts issues into those of a cell and those of the table as a whole. */

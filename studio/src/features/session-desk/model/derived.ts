@@ -1,24 +1,30 @@
-import { parseSessionStudy, type SessionStudy, type SessionStudyInput, type StudyIssue } from '@voltiplano/engine';
+import type { SessionStudy, SessionStudyInput, StudyIssue } from '@voltiplano/engine';
 import { changedPaths } from './changes.ts';
+import { checkedStudy } from './checked-study.ts';
 import type { Sheet } from './desk-state.ts';
 import { draftIssues, type Draft } from './draft.ts';
+import { remembered } from './remembered.ts';
 
-/** What is wrong with a draft's waiting entries; worked out once per draft. */
-export const issuesOf = remembered((draft: Draft): readonly StudyIssue[] => draftIssues(draft));
+const NONE: readonly never[] = [];
 
-/** A study with every default filled in, as the engine runs it; worked out once per study. */
-export const filledOf = remembered((study: SessionStudyInput): SessionStudy => parseSessionStudy(study));
+/** What is wrong with a draft's waiting entries; the same empty list wherever nothing waits. */
+export const issuesOf = remembered((draft: Draft): readonly StudyIssue[] => {
+  const issues = draftIssues(draft);
+  return issues.length > 0 ? issues : NONE;
+});
+
+/**
+ * A study with every default filled in, as the engine runs it.
+ *
+ * @throws {Error} for a study that cannot be run: no such study comes onto the desk
+ */
+export function filledOf(study: SessionStudyInput): SessionStudy {
+  const checked = checkedStudy(study);
+  if ('issues' in checked) throw new Error(`Not a study: ${checked.issues.map((one) => one.message).join('; ')}`);
+  return checked.study;
+}
 
 /** Paths in which the present study differs from the baseline; none without one. */
 export const changesOf = remembered((sheet: Sheet): readonly string[] =>
-  sheet.baseline ? changedPaths(sheet.draft.study, sheet.baseline) : [],
+  sheet.baseline ? changedPaths(sheet.draft.study, sheet.baseline) : NONE,
 );
-
-function remembered<K extends object, V>(of: (key: K) => V): (key: K) => V {
-  const known = new WeakMap<K, V>();
-  return (key) => {
-    const value = known.get(key) ?? of(key);
-    known.set(key, value);
-    return value;
-  };
-}

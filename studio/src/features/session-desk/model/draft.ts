@@ -1,4 +1,5 @@
-import { parseStudy, StudyError, type SessionStudyInput, type StudyIssue } from '@voltiplano/engine';
+import type { SessionStudyInput, StudyIssue } from '@voltiplano/engine';
+import { studyIssues } from './checked-study.ts';
 import { isWithin, valueAt, withValueAt } from './study-path.ts';
 import type { Cell, Grid } from '../../../components/fields/grid.ts';
 import { tableAt } from './table-specs.ts';
@@ -49,13 +50,6 @@ export function draftIssues(draft: Draft): StudyIssue[] {
 /** The entry that waits at a path, or the value in the study. */
 export function entryAt(draft: Draft, path: string): unknown {
   return path in draft.pending ? draft.pending[path] : valueAt(draft.study, path);
-}
-
-/** The grid a table shows: the one that waits, or the study's own. */
-export function gridAt(draft: Draft, path: string): Grid {
-  const waiting = draft.pending[path];
-  if (Array.isArray(waiting)) return waiting;
-  return tableAt(path, draft.study.strategy.taper)?.toGrid(valueAt(draft.study, path)) ?? [];
 }
 
 /** Moves every entry into the study that can stand there; together if that is right, else one by one. */
@@ -115,15 +109,4 @@ function unreadableIssues(draft: Draft, path: string, entry: Entry): StudyIssue[
 
 function notANumber(path: string, text: string): StudyIssue {
   return { path, rule: 'not-a-number', value: text, message: `${path} must be a number, but is “${text}”` };
-}
-
-/** Issues of a value as a session study; none where it can be run. */
-export function studyIssues(json: unknown): StudyIssue[] {
-  try {
-    parseStudy(json);
-    return [];
-  } catch (error) {
-    if (error instanceof StudyError) return error.issues;
-    throw error;
-  }
 }

@@ -1,6 +1,6 @@
 import type { SessionStudyInput, StudyIssue } from '@voltiplano/engine';
 import { firstView, type DeskState, type Sheet, type Step } from './desk-state.ts';
-import { studyIssues } from './draft.ts';
+import { studyIssues } from './checked-study.ts';
 
 /** Steps of undo that survive a reload; each holds a whole study. */
 const STEPS_KEPT_OVER_RELOAD = 40;

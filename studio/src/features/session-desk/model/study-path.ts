@@ -1,18 +1,24 @@
 /** Steps into a JSON value: a name for a member, a number for a row. */
 export type PathStep = string | number;
 
+/** Every field reads its path at every change of the desk. */
+const parsed = new Map<string, readonly PathStep[]>();
+
 /**
  * Reads a path as the engine writes it: `strategy.taper.points[3].soc`.
  *
  * @throws {Error} on text that is no path; paths come from code, so that is a mistake in the program
  */
-export function parsePath(path: string): PathStep[] {
+export function parsePath(path: string): readonly PathStep[] {
+  const known = parsed.get(path);
+  if (known) return known;
   const steps: PathStep[] = [];
   for (const part of path.split('.')) {
     const match = /^([A-Za-z0-9]+)((?:\[\d+\])*)$/.exec(part);
     if (!match) throw new Error(`Not a path into a study: ${path}`);
     steps.push(match[1]!, ...[...match[2]!.matchAll(/\d+/g)].map((index) => Number(index[0])));
   }
+  parsed.set(path, steps);
   return steps;
 }
 
@@ -30,9 +36,9 @@ export function withValueAt<T>(json: T, path: string, value: unknown): T {
   return placed(json, parsePath(path), value) as T;
 }
 
-function placed(json: unknown, steps: PathStep[], value: unknown): unknown {
+function placed(json: unknown, steps: readonly PathStep[], value: unknown): unknown {
   if (steps.length === 0) return value;
-  const [step, ...rest] = steps as [PathStep, ...PathStep[]];
+  const [step, ...rest] = steps as readonly [PathStep, ...PathStep[]];
   if (typeof step === 'number') return placedInRow(json, step, rest, value);
   const members =
     typeof json === 'object' && json !== null && !Array.isArray(json) ? (json as Record<string, unknown>) : {};
@@ -43,7 +49,7 @@ function placed(json: unknown, steps: PathStep[], value: unknown): unknown {
   return json === undefined ? undefined : others;
 }
 
-function placedInRow(json: unknown, row: number, rest: PathStep[], value: unknown): unknown {
+function placedInRow(json: unknown, row: number, rest: readonly PathStep[], value: unknown): unknown {
   const rows: unknown[] = Array.isArray(json) ? [...(json as unknown[])] : [];
   rows[row] = placed(rows[row], rest, value);
   return rows;
