@@ -128,7 +128,7 @@ test('RC step: R0 = 20 mΩ, R1 = 10 mΩ, τ = 20 s, 5 A', () => {
     s.strategy.taper = constant(10);
     s.session.maxMin = 2;
   });
-  const { series } = run(study, { everyS: 5 }).result;
+  const { series, energyLedger: ledger } = run(study, { everyS: 5 }).result;
   const overvoltage = (row: number) => series.highestCellV[row] - 3.5;
   // The second row is the end of the ramp after 0.1 ms.
   const values = [
@@ -140,6 +140,13 @@ test('RC step: R0 = 20 mΩ, R1 = 10 mΩ, τ = 20 s, 5 A', () => {
   for (const [tS, volts] of values) expect(off(overvoltage(rowAt(series, tS)), volts)).toBeLessThan(TIGHT);
   const packVolts = series.packVoltageV[rowAt(series, 60)];
   expect(off(packVolts - 350, 100 * 0.147510647)).toBeLessThan(TIGHT);
+  // Heat of the pairs over t = 120 s: ∫v²/R dt with v = I·R·(1 − exp(−t/τ)); what they hold at the end is τ·v²/2R.
+  const left = Math.exp(-120 / 20);
+  const [watts, held] = [200 * 25 * 10e-3, 20 / 2];
+  const heat = watts * (120 - 2 * 20 * (1 - left) + held * (1 - left ** 2));
+  expect(off(ledger.polarisationKwh, heat / 3.6e6)).toBeLessThan(TIGHT);
+  expect(off(ledger.rcPairsKwh, (watts * held * (1 - left) ** 2) / 3.6e6)).toBeLessThan(TIGHT);
+  expect(off(ledger.ohmicKwh, (2 * watts * 120) / 3.6e6)).toBeLessThan(TIGHT);
 });
 
 test('CV phase on U = a + b·z: I = I0·exp(−t/τ), τ = R·Q/b', () => {
