@@ -118,3 +118,24 @@ test('time constants are those a run shows: a warm pack on coolant of steady tem
   const fall = Math.log((series.hottestCoreC[row] - 20) / (series.hottestCoreC[next] - 20));
   expect(600 / fall).toBeCloseTo(timeConstantsS[0], 2);
 });
+
+describe('ends, whatever the study', () => {
+  test('400 segments in air are as fast as one', () => {
+    const [one, many] = [1, 400].map((segments) =>
+      thermalAnalysis(
+        twoNodes((s) => (s.pack.segments = segments)),
+        12_000,
+      ),
+    );
+    many.timeConstantsS.forEach((seconds, i) => expect(seconds / one.timeConstantsS[i]).toBeCloseTo(1, 9));
+    expect(many.steady!.hottestCoreC).toBeCloseTo(one.steady!.hottestCoreC, 6);
+  });
+
+  // The smallest numbers the schema takes: a time constant that rounds to nothing, not an iteration without end.
+  test.each([1e-3, 1e-300, 5e-324])('a structure of %f J/K as the only surface', (joulePerKelvin) => {
+    const study = twoNodes((s) => (s.pack.structureJPerK = joulePerKelvin));
+    const { timeConstantsS } = thermalAnalysis(study, 12_000);
+    expect(timeConstantsS.at(-1)).toBeLessThan(1e-5);
+    expect(timeConstantsS.every((seconds) => seconds >= 0)).toBe(true);
+  });
+});
