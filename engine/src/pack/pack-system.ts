@@ -71,8 +71,14 @@ export class PackSystem {
   /** Largest currents that keep the voltage ceiling and the anode margin in every segment [A]; may be negative. */
   ceilingCurrent = 0;
   anodeCurrent = 0;
-  /** Electrical power of all auxiliaries [W]. */
+  /** Loop and inlet [°C]; electrical power of all auxiliaries [W]. */
+  loopC = 0;
+  inletC = 0;
   auxiliaryW = 0;
+
+  /** Current into the pack and through the inlet [A]: whoever decides them sets them before `rates`. */
+  current = 0;
+  inletCurrent = 0;
 
   constructor({ cell, pack, thermal, inlet, strategy }: PackParts) {
     const segments = pack.segments;
@@ -158,18 +164,21 @@ export class PackSystem {
     this.anodeRest = phi;
     this.entropicVPerK = n * entropic;
     const coolant = this.coolant;
-    coolant.control(hottest, coldest, y[this.layout.loop], this.ambientC, this.speed);
+    this.loopC = y[this.layout.loop];
+    this.inletC = y[this.layout.inlet];
+    coolant.control(this);
     this.auxiliaryW = this.hotelW + coolant.electricalW;
   }
 
   /**
-   * Writes the time derivatives of the physical states and the pack's own integrals for a current into the pack [A]
-   * and one through the inlet [A]. `observe` must have read the same state.
+   * Writes the time derivatives of the physical states and the pack's own integrals at `current` and `inletCurrent`.
+   * `observe` must have read the same state.
    */
-  rates(y: ArrayLike<number>, dy: number[], current: number, inletCurrent: number): void {
+  rates(y: ArrayLike<number>, dy: number[]): void {
     const { core, surface, rc, pairs, segments: M, twoNode, loop, inlet, integrals } = this.layout;
     const coolant = this.coolant;
-    const I = current;
+    const I = this.current;
+    const inletCurrent = this.inletCurrent;
     const busbar = I * I * this.busbarOhm;
     const air = this.surfaceToAir;
     const ambient = this.ambientC;

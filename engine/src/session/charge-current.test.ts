@@ -12,11 +12,10 @@ function looked(change: (study: SessionStudyInput) => void, tS = 100, states: (y
   states(y);
   system.at(tS, y);
   const { charge, pack } = system;
-  const inletC = y[pack.layout.inlet];
   return {
     charge,
     code: limitCodes[charge.code],
-    allowed: (code: LimitCode) => charge.allowedBy(LIMIT[code], tS, inletC),
+    allowed: (code: LimitCode) => charge.allowedBy(LIMIT[code], tS),
     y,
     pack,
   };
@@ -200,11 +199,11 @@ test('ChargeCurrent.decide names the first listed of limits that allow the same'
 });
 
 test('ChargeCurrent.follow stands on one limit alone, past the others', () => {
-  const { charge, y, pack } = looked((s) => {
+  const { charge } = looked((s) => {
     s.pack.chargeCurrentMaxA = 300;
     s.strategy.taper = constant(350);
   });
   expect(charge.current).toBe(300);
-  charge.follow(LIMIT.taper, 100, y[pack.layout.inlet]);
+  charge.follow(LIMIT.taper, 100);
   expect([charge.current, limitCodes[charge.code]]).toEqual([350, 'taper']);
 });

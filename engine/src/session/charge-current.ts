@@ -83,8 +83,8 @@ export class ChargeCurrent {
     this.efficiency = boost?.efficiency ?? 1;
   }
 
-  /** Sets current, station current and binding limit, `seconds` after plug-in; `inletC` is the inlet's temperature [°C]. */
-  decide(seconds: number, inletC: number): void {
+  /** Sets current, station current and binding limit, `seconds` after plug-in. */
+  decide(seconds: number): void {
     const system = this.system;
     const limits = this.limits;
     let I = limits.packMaxA;
@@ -123,7 +123,7 @@ export class ChargeCurrent {
       cap = rampA;
       capCode = STATION_RAMP;
     }
-    const inlet = this.inletMaxA === Infinity ? Infinity : this.inletCurrent(inletC);
+    const inlet = this.inletMaxA === Infinity ? Infinity : this.inletLimit();
     if (inlet < cap) {
       cap = inlet;
       capCode = INLET;
@@ -135,12 +135,12 @@ export class ChargeCurrent {
     }
     // Power and voltage are asked only where they would bind: solving for them takes more work.
     if (this.overPower(Id, I, code)) {
-      I = this.allowedBy(STATION_POWER, seconds, inletC);
+      I = this.allowedBy(STATION_POWER, seconds);
       Id = this.stationSide(I);
       code = STATION_POWER;
     }
     if (!this.boosted && system.restV + system.ohm * I + Id * system.inletOhm >= this.stationVoltageMaxV) {
-      const voltage = this.allowedBy(STATION_VOLTAGE, seconds, inletC);
+      const voltage = this.allowedBy(STATION_VOLTAGE, seconds);
       if (voltage < I || (voltage === I && code > STATION_VOLTAGE)) {
         I = voltage;
         Id = this.stationSide(I);
@@ -151,13 +151,13 @@ export class ChargeCurrent {
   }
 
   /** Sets the fields as if only one limit stood. */
-  follow(code: number, seconds: number, inletC: number): void {
-    const I = this.allowedBy(code, seconds, inletC);
+  follow(code: number, seconds: number): void {
+    const I = this.allowedBy(code, seconds);
     this.take(I, this.stationSide(I), code);
   }
 
   /** Largest current into the pack that one limit allows now [A]; Infinity where it does not stand. */
-  allowedBy(code: number, seconds: number, inletC: number): number {
+  allowedBy(code: number, seconds: number): number {
     const system = this.system;
     switch (code) {
       case STATION_CURRENT:
@@ -177,7 +177,7 @@ export class ChargeCurrent {
       case STATION_RAMP:
         return this.packSide(this.rampAPerS * seconds);
       case INLET:
-        return this.inletMaxA === Infinity ? Infinity : this.packSide(this.inletCurrent(inletC));
+        return this.inletMaxA === Infinity ? Infinity : this.packSide(this.inletLimit());
       case PACK_CURRENT:
         return this.limits.packMaxA;
       case CELL_VOLTAGE:
@@ -211,8 +211,8 @@ export class ChargeCurrent {
     return this.taper.unit === 'kW' ? currentForPower(restV, ohm, value) : value;
   }
 
-  private inletCurrent(inletC: number): number {
-    const room = (this.inletToC - inletC) / (this.inletToC - this.inletFromC);
+  private inletLimit(): number {
+    const room = (this.inletToC - this.system.inletC) / (this.inletToC - this.inletFromC);
     return this.inletMaxA * (room < 0 ? 0 : room > 1 ? 1 : room);
   }
 

@@ -67,8 +67,8 @@ function overLedge({ pack, charge, taper }: SessionSystem): number {
 }
 
 /** Current that one limit allows at the moment last looked at [A]. */
-export function allowedBy({ system, at, seen }: SessionSolution, code: number): number {
-  return system.charge.allowedBy(code, at, seen[system.pack.layout.inlet]);
+export function allowedBy({ system, at }: SessionSolution, code: number): number {
+  return system.charge.allowedBy(code, at);
 }
 
 /** First moment at which `value`, read after a look, is no longer below 0; `to` if it is not so before. */

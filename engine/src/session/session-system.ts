@@ -35,7 +35,7 @@ export class SessionSystem {
   /** Reads a state at t seconds after plug-in and decides the current there by all limits. */
   at(t: number, y: ArrayLike<number>): void {
     this.pack.observe(y);
-    this.charge.decide(t, y[this.pack.layout.inlet]);
+    this.charge.decide(t);
   }
 
   /** dy/dt for the integrator. */
@@ -43,10 +43,12 @@ export class SessionSystem {
     const { pack, charge } = this;
     const { inlet, integrals } = pack.layout;
     pack.observe(y);
-    if (this.followed < 0) charge.decide(t, y[inlet]);
-    else charge.follow(this.followed, t, y[inlet]);
-    const { current, stationCurrent } = charge;
-    pack.rates(y, dy, current, stationCurrent);
+    if (this.followed < 0) charge.decide(t);
+    else charge.follow(this.followed, t);
+    const { stationCurrent } = charge;
+    pack.current = charge.current;
+    pack.inletCurrent = stationCurrent;
+    pack.rates(y, dy);
     dy[integrals] = charge.stationVoltage * stationCurrent;
     dy[integrals + 2] = charge.boostLossW;
     // Every state feeds one of these sums, so anything not finite shows here; odex would take NaN for converged.

@@ -31,7 +31,7 @@ function controlled(
   { hottest = 40, coldest = 20, loop = 25, ambient = 20, speed = 0 }: Moment,
 ) {
   const coolant = new CoolantLoop(thermal(parts), 4);
-  coolant.control(hottest, coldest, loop, ambient, speed);
+  coolant.control({ hottestSurface: hottest, coldestSurface: coldest, loopC: loop, ambientC: ambient, speed });
   return coolant;
 }
 

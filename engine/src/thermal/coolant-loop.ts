@@ -6,6 +6,15 @@ const ramp = (value: number, zero: number, one: number) => {
   return u < 0 ? 0 : u > 1 ? 1 : u;
 };
 
+/** What the controllers act on: hottest and coldest surface, loop and ambient [°C], vehicle speed [m/s]. */
+export type Sensed = {
+  hottestSurface: number;
+  coldestSurface: number;
+  loopC: number;
+  ambientC: number;
+  speed: number;
+};
+
 /**
  * Coolant loop with chiller, radiator and heater (engine/MODEL.md, section 4).
  *
@@ -43,8 +52,9 @@ export class CoolantLoop {
     this.heater = thermal.heater;
   }
 
-  /** Sets what the controllers do, from hottest and coldest surface, loop and ambient [°C] and speed [m/s]. */
-  control(hottest: number, coldest: number, loop: number, ambient: number, speed: number): void {
+  /** Sets what the controllers do. One object comes in, since numbers passed one by one would be boxed. */
+  control(sensed: Sensed): void {
+    const { hottestSurface: hottest, coldestSurface: coldest, loopC: loop, ambientC: ambient, speed } = sensed;
     const W = this.flowWPerK;
     this.chillerW = 0;
     this.radiatorW = 0;
@@ -52,7 +62,7 @@ export class CoolantLoop {
     this.electricalW = this.pumpW;
     this.inC = loop;
     if (W === 0) return;
-    if (this.chiller !== undefined) this.chill(this.chiller, hottest, loop, ambient);
+    if (this.chiller !== undefined) this.chill(this.chiller, sensed);
     if (this.radiator !== undefined) {
       const { parkedWPerK, perMpsWPerK, onC, fullC } = this.radiator;
       const u = ramp(hottest, onC, fullC);
@@ -73,8 +83,9 @@ export class CoolantLoop {
     return (this.flowWPerK * (out - loop)) / this.loopJPerK;
   }
 
-  private chill(chiller: NonNullable<Thermal['chiller']>, hottest: number, loop: number, ambient: number): void {
-    const u = ramp(hottest, chiller.onC, chiller.fullC);
+  private chill(chiller: NonNullable<Thermal['chiller']>, sensed: Sensed): void {
+    const { loopC: loop, ambientC: ambient } = sensed;
+    const u = ramp(sensed.hottestSurface, chiller.onC, chiller.fullC);
     if (u === 0 || loop <= chiller.minCoolantC) return;
     const hot = ambient > 35 ? 1 - chiller.deratePerKAbove35 * (ambient - 35) : 1;
     const rated = u * chiller.ratedW * (hot < 0 ? 0 : hot);

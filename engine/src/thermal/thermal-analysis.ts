@@ -172,7 +172,9 @@ function steadyState(system: PackSystem, heatW: number): SteadyState | null {
     let surfaces = atZero;
     for (let round = 0; round < 60; round++) {
       surfaces = atZero.map((value, j) => value + perKelvin[j] * inlet);
-      coolant.control(Math.max(...surfaces), Math.min(...surfaces), loop, system.ambientC, 0);
+      const { ambientC } = system;
+      const hottestSurface = Math.max(...surfaces);
+      coolant.control({ hottestSurface, coldestSurface: Math.min(...surfaces), loopC: loop, ambientC, speed: 0 });
       inlet = 0.5 * (inlet + coolant.inC);
     }
     const out = surfaces.reduce((theta, surface) => theta + coolant.effectiveness * (surface - theta), coolant.inC);

@@ -56,7 +56,9 @@ export class DriveSystem {
     const { integrals, inlet } = pack.layout;
     pack.observe(y);
     drive.decide();
-    pack.rates(y, dy, drive.current, 0);
+    pack.current = drive.current;
+    pack.inletCurrent = 0;
+    pack.rates(y, dy);
     dy[integrals] = 0;
     dy[integrals + 2] = 0;
     const sum = dy[integrals + 9] + dy[integrals + 12] + pack.coolant.outC + y[inlet];
