@@ -68,6 +68,24 @@ test('ledges: 200, 100 and 50 A from 0, 30 and 60 %', () => {
   expect([series.tS[rows[0] - 1], series.tS[rows[1] + 1]]).toEqual([540, 550]);
 });
 
+test('a start on a ledge’s edge stands on that ledge, without an event', () => {
+  const study = plain((s) => {
+    s.strategy.taper = {
+      shape: 'ledges',
+      unit: 'A',
+      steps: [
+        { fromSoc: 0, value: 200 },
+        { fromSoc: 0.3, value: 100 },
+      ],
+    };
+    s.session.startSoc = 0.3;
+    s.session.targetSoc = 0.4;
+  });
+  const { events, metrics } = run(study).result;
+  expect(events.map(({ event }) => event)).toEqual(['limit:station-ramp', 'limit:taper', 'end:target']);
+  expect(metrics.endMin * 60).toBeCloseTo(360 + RAMP_S(100), 6);
+});
+
 test('voltage-ledges chain: a move whose new current still stands above the next voltage goes on at once', () => {
   // 3.4 + 0.8·z + I·1 mΩ: 200 A reaches 3.9 V at z = 0.375; at 190 A the cell then stands at 3.89 V, above 3.85, and at
   // 50 A at 3.75 V, which rises to 3.95 V at z = 0.625.
