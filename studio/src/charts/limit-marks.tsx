@@ -1,5 +1,5 @@
 import type { LimitCode } from '@voltiplano/engine';
-import { useId, type ReactNode } from 'react';
+import { memo, useId, type ReactNode } from 'react';
 import { hatchTiles, limitBedEdge, limitLabel, limitOverprint, limitsInOrder, limitTint } from './limits.ts';
 
 /** Fill of a bed whose patterns stand in the same drawing under `prefix`. */
@@ -20,7 +20,7 @@ function LimitPattern({ prefix, code }: { prefix: string; code: LimitCode }) {
 }
 
 /** The eleven hatches, and the hatch of losses, for one drawing; ids are unique under `prefix`. */
-export function LimitPatterns({ prefix }: { prefix: string }) {
+export const LimitPatterns = memo(function LimitPatterns({ prefix }: { prefix: string }) {
   return (
     <defs>
       {limitsInOrder.map((code) => (
@@ -31,12 +31,12 @@ export function LimitPatterns({ prefix }: { prefix: string }) {
       </pattern>
     </defs>
   );
-}
+});
 
 type SwatchProps = { code: LimitCode; w?: number; h?: number };
 
 /** A piece of a limit's bed, to stand before its name. */
-export function LimitSwatch({ code, w = 20, h = 12 }: SwatchProps) {
+export const LimitSwatch = memo(function LimitSwatch({ code, w = 20, h = 12 }: SwatchProps) {
   const prefix = `${useId()}-`;
   return (
     <span className="sw" style={{ width: w, height: h }}>
@@ -48,7 +48,7 @@ export function LimitSwatch({ code, w = 20, h = 12 }: SwatchProps) {
       </svg>
     </span>
   );
-}
+});
 
 type NameProps = {
   code: LimitCode;

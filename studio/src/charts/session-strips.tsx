@@ -26,6 +26,7 @@ import { StripsPlot } from './strips-plot.tsx';
 import { taperLine, type TaperTable } from './taper-line.ts';
 import { usePointerCursor } from './use-pointer-cursor.ts';
 import { shiftedRange, useVisibleRange } from './use-visible-range.ts';
+import { useSteady } from './use-steady.ts';
 import { useWidth } from './use-width.ts';
 import { ZoomWords } from './zoom-words.tsx';
 
@@ -83,16 +84,26 @@ function StripsSheet(props: Props & { width: number }) {
   const grey = useMemo(() => (baseline ? stripColumns(baseline, units) : null), [baseline, units]);
   const shownBounds = useMemo(() => boundsInUnits(bounds, units), [bounds, units]);
   const hasAnode = live.anodeMv.some((value) => value !== null);
-  const layout = useMemo(() => {
-    const runs = grey ? [live, grey] : [live];
-    const shown = stripSpecs(units).filter(({ key }) => !hidden.has(key) && (key !== 'anode' || hasAnode));
-    return stripLayout(
-      width,
-      shown.map((spec) => ({ spec, range: spec.range(runs, shownBounds) })),
-    );
-  }, [width, units, live, grey, shownBounds, hidden, hasAnode]);
+  const specs = useMemo(
+    () => stripSpecs(units).filter(({ key }) => !hidden.has(key) && (key !== 'anode' || hasAnode)),
+    [units, hidden, hasAnode],
+  );
+  const ranges = useSteady(
+    useMemo(() => {
+      const runs = grey ? [live, grey] : [live];
+      return specs.map((spec) => spec.range(runs, shownBounds));
+    }, [specs, live, grey, shownBounds]),
+  );
+  const layout = useMemo(
+    () =>
+      stripLayout(
+        width,
+        specs.map((spec, i) => ({ spec, range: ranges[i]! })),
+      ),
+    [width, specs, ranges],
+  );
 
-  const whole = useMemo(() => fullRange(grey ? [live, grey] : [live], axis), [live, grey, axis]);
+  const whole = useSteady(useMemo(() => fullRange(grey ? [live, grey] : [live], axis), [live, grey, axis]));
   const { range, zoomed, setRange, zoomAbout } = useVisibleRange(whole, axis);
   const { left, right } = layout;
   const x = useCallback(

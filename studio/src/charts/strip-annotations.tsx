@@ -78,7 +78,7 @@ function Dimensions({ layout, result, xOfMinute }: Props) {
   });
 }
 
-function Bounds({ layout, bounds }: { layout: StripLayout; bounds: ShownBounds }) {
+const Bounds = memo(function Bounds({ layout, bounds }: { layout: StripLayout; bounds: ShownBounds }) {
   const rows = layout.strips.flatMap((strip) =>
     boundsOf(strip, bounds, layout.size === 'phone').map((bound) => ({ ...bound, strip })),
   );
@@ -95,7 +95,7 @@ function Bounds({ layout, bounds }: { layout: StripLayout; bounds: ShownBounds }
         </g>
       );
     });
-}
+});
 
 function boundsOf(
   { spec }: PlacedStrip,
@@ -205,7 +205,7 @@ function Notes({ layout, notes, bounds, xOfMinute }: Props) {
   });
 }
 
-function BandRules({ layout }: { layout: StripLayout }) {
+const BandRules = memo(function BandRules({ layout }: { layout: StripLayout }) {
   const { left, right, bandTop, bandHeight, size } = layout;
   return limitSides.map((side, i) => {
     const y = bandTop + (bandHeight / 3) * (i + 1);
@@ -227,7 +227,7 @@ function BandRules({ layout }: { layout: StripLayout }) {
       </g>
     );
   });
-}
+});
 
 /** Minutes per side, in line with the band. */
 function SideMinutes({ layout, result }: Props) {

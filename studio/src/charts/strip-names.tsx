@@ -1,9 +1,10 @@
+import { memo } from 'react';
 import { textWidth } from './label-fit.ts';
 import { Label } from './label.tsx';
 import type { StripLayout } from './strip-layout.ts';
 
 /** Name and unit of each strip: in the left gutter, on a phone above the strip. */
-export function StripNames({ layout }: { layout: StripLayout }) {
+export const StripNames = memo(function StripNames({ layout }: { layout: StripLayout }) {
   if (layout.size === 'phone') return <PhoneNames layout={layout} />;
   return (
     <>
@@ -13,7 +14,7 @@ export function StripNames({ layout }: { layout: StripLayout }) {
       <StackedName words={['Limit', 'band']} top={layout.bandTop} />
     </>
   );
-}
+});
 
 function StackedName({ words, unit, top }: { words: string[]; unit?: string; top: number }) {
   return (

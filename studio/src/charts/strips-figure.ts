@@ -4,9 +4,10 @@ import type { PlotlyFigure } from './plotly.ts';
 import { axisColumn, type StripAxis } from './strip-axis.ts';
 import type { StripColumns } from './strip-columns.ts';
 import type { PlacedStrip, StripLayout } from './strip-layout.ts';
+import type { LineSpec } from './strip-specs.ts';
 import { tickDigits } from './ticks.ts';
 
-type FigureInput = {
+export type FigureInput = {
   live: StripColumns;
   baseline: StripColumns | null;
   axis: StripAxis;
@@ -19,52 +20,65 @@ type FigureInput = {
   zooms: boolean;
 };
 
+/** One line of the figure: its data and the strip it lies in. */
+export type StripTrace = {
+  /** The same for the same line of every run, so that Plotly keeps its element. */
+  uid: string;
+  strip: PlacedStrip;
+  x: readonly number[];
+  y: readonly (number | null)[];
+  ink: string;
+  widthPx: number;
+  dash: readonly number[];
+};
+
 /** One figure with all strips over one axis: Plotly's part is scales, lines and zoom. */
 export function stripsFigure(input: FigureInput): PlotlyFigure {
+  const { strips } = input.layout;
   return {
-    data: [...baselineLines(input), ...liveLines(input)],
+    data: stripTraces(input).map((trace) => traceData(trace, strips.indexOf(trace.strip), input.color)),
     layout: figureLayout(input),
     config: { displayModeBar: false, doubleClick: false, responsive: false, showTips: false, scrollZoom: false },
   };
 }
 
-const yName = (index: number) => (index === 0 ? 'y' : `y${index + 1}`);
-
-function liveLines({ live, axis, layout, color }: FigureInput): Data[] {
-  const x = axisColumn(live, axis);
-  return layout.strips.flatMap((strip, index) =>
-    strip.spec.lines
-      .filter((line) => !(line.wideOnly && layout.size === 'phone'))
-      .map((line) => ({
-        type: 'scatter' as const,
-        mode: 'lines' as const,
-        x,
-        y: live[line.column],
-        yaxis: yName(index),
-        line: {
-          color: color(line.ink),
-          width: line.widthPx,
-          ...(line.dash.length > 0 && { dash: line.dash.map((px) => `${px}px`).join(',') }),
-        },
-      })),
-  ) as Data[];
+/** The lines of the figure, the baseline's behind. */
+export function stripTraces({ live, baseline, axis, layout }: FigureInput): StripTrace[] {
+  const phone = layout.size === 'phone';
+  const traces = (columns: StripColumns, run: string, keep: (line: LineSpec) => boolean) =>
+    layout.strips.flatMap((strip) =>
+      strip.spec.lines.filter(keep).map((line): StripTrace => {
+        const { ink, widthPx, dash } = run === 'live' ? line : BASELINE_STYLE;
+        const uid = `${run}-${line.column}`;
+        return { uid, strip, x: axisColumn(columns, axis), y: columns[line.column], ink, widthPx, dash };
+      }),
+    );
+  return [
+    ...(baseline ? traces(baseline, 'baseline', (line) => line.onBaseline === true) : []),
+    ...traces(live, 'live', (line) => !(line.wideOnly && phone)),
+  ];
 }
 
-function baselineLines({ baseline, axis, layout, color }: FigureInput): Data[] {
-  if (!baseline) return [];
-  const x = axisColumn(baseline, axis);
-  return layout.strips.flatMap((strip, index) =>
-    strip.spec.lines
-      .filter((line) => line.onBaseline)
-      .map((line) => ({
-        type: 'scatter' as const,
-        mode: 'lines' as const,
-        x,
-        y: baseline[line.column],
-        yaxis: yName(index),
-        line: { color: color('--base'), width: 1.6 },
-      })),
-  );
+const BASELINE_STYLE = { ink: '--base', widthPx: 1.6, dash: [] };
+
+const yName = (index: number) => (index === 0 ? 'y' : `y${index + 1}`);
+
+function traceData({ uid, x, y, ink, widthPx, dash }: StripTrace, index: number, color: FigureInput['color']): Data {
+  return {
+    type: 'scatter',
+    mode: 'lines',
+    uid,
+    x,
+    y,
+    yaxis: yName(index),
+    // Every row is drawn: a line moved in place (strips-drawing.ts) is then the line Plotly itself would draw.
+    line: {
+      color: color(ink),
+      width: widthPx,
+      simplify: false,
+      ...(dash.length > 0 && { dash: dash.map((px) => `${px}px`).join(',') }),
+    },
+  } as Data;
 }
 
 function figureLayout({ layout, range, color, zooms }: FigureInput): Partial<Layout> {

@@ -22,7 +22,7 @@ describe('ranges', () => {
   it('rangeFromZero covers the greatest value with air', () => {
     const [from, to] = rangeFromZero(91.2, 3);
     expect(from).toBe(0);
-    expect(to).toBe(110);
+    expect(to).toBe(120);
   });
   it('rangeFromZero of nothing is still an axis', () => expect(rangeFromZero(0, 3)).toEqual([0, 1]));
   it('rangeAround holds all of the data between round values', () => {

@@ -29,12 +29,12 @@ function roundTo(value: number, step: number): number {
   return Number(value.toFixed(tickDigits(step) + 1));
 }
 
-/** An axis from nought with air above the greatest value, ending on a fifth of a tick so that it holds still. */
+/** An axis from nought with air above the greatest value, ending on two fifths of a tick so that it holds still. */
 export function rangeFromZero(greatest: number, count: number): [number, number] {
   if (!(greatest > 0)) return [0, 1];
   const wanted = greatest * 1.12;
-  const fifth = tickStep(wanted, count) / 5;
-  return [0, Math.ceil(wanted / fifth - 1e-9) * fifth];
+  const part = tickStep(wanted, count) * 0.4;
+  return [0, Math.ceil(wanted / part - 1e-9) * part];
 }
 
 /** An axis between round values (half ticks) around the data. */
