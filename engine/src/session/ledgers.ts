@@ -17,6 +17,27 @@ export function integralsBetween(
   >;
 }
 
+type PackParts = Pick<
+  EnergyLedger,
+  'busbarKwh' | 'ohmicKwh' | 'polarisationKwh' | 'reversibleKwh' | 'storedKwh' | 'rcPairsKwh'
+>;
+
+/** What becomes of the energy at the pack's terminals between two states [kWh]. */
+export function packParts(pack: PackSystem, from: readonly number[], to: readonly number[]): PackParts {
+  const joule = integralsBetween(pack, from, to);
+  return {
+    busbarKwh: joule.busbar / J_PER_KWH,
+    ohmicKwh: joule.ohmic / J_PER_KWH,
+    polarisationKwh: joule.polarisation / J_PER_KWH,
+    reversibleKwh: joule.reversible / J_PER_KWH,
+    storedKwh: pack.storedJ(from[0], to[0]) / J_PER_KWH,
+    rcPairsKwh: joule.rcPairs / J_PER_KWH,
+  };
+}
+
+export const sumOf = (parts: Record<string, number>): number =>
+  Object.values(parts).reduce((sum, part) => sum + part, 0);
+
 /** Energy from the grid to the cells between two states of a session (engine/MODEL.md, section 8). */
 export function energyLedger(
   pack: PackSystem,
@@ -25,33 +46,20 @@ export function energyLedger(
   rectifierEfficiency: number,
 ): EnergyLedger {
   const joule = integralsBetween(pack, from, to);
-  const kwh = (j: number) => j / J_PER_KWH;
-  const stored = pack.storedJ(from[0], to[0]);
-  const explained =
-    joule.inlet +
-    joule.boostLoss +
-    joule.auxiliaries +
-    joule.busbar +
-    joule.ohmic +
-    joule.polarisation +
-    joule.reversible +
-    stored +
-    joule.rcPairs;
-  const grid = joule.station / rectifierEfficiency;
+  const stationKwh = joule.station / J_PER_KWH;
+  const gridKwh = stationKwh / rectifierEfficiency;
+  const spent = {
+    inletKwh: joule.inlet / J_PER_KWH,
+    boostLossKwh: joule.boostLoss / J_PER_KWH,
+    auxiliariesKwh: joule.auxiliaries / J_PER_KWH,
+    ...packParts(pack, from, to),
+  };
   return {
-    gridKwh: kwh(grid),
-    rectifierLossKwh: kwh(grid - joule.station),
-    stationKwh: kwh(joule.station),
-    inletKwh: kwh(joule.inlet),
-    boostLossKwh: kwh(joule.boostLoss),
-    auxiliariesKwh: kwh(joule.auxiliaries),
-    busbarKwh: kwh(joule.busbar),
-    ohmicKwh: kwh(joule.ohmic),
-    polarisationKwh: kwh(joule.polarisation),
-    reversibleKwh: kwh(joule.reversible),
-    storedKwh: kwh(stored),
-    rcPairsKwh: kwh(joule.rcPairs),
-    remainderKwh: kwh(joule.station - explained),
+    gridKwh,
+    rectifierLossKwh: gridKwh - stationKwh,
+    stationKwh,
+    ...spent,
+    remainderKwh: stationKwh - sumOf(spent),
   };
 }
 

@@ -21,27 +21,31 @@ export function DeskTitleBlock({ actions }: Props) {
 function TitleField() {
   const dispatch = useDispatch();
   const title = useDesk(({ sheet }) => sheet.draft.study.title ?? '');
+  const set = (text: string) => {
+    // The field wraps, but a title is one line, also where it is pasted.
+    const value = text.replace(/\s*\n\s*/g, ' ') || undefined;
+    dispatch({ type: 'parts', parts: [{ path: 'title', value }], label: 'title', typingAt: 'title' });
+  };
   return (
     <>
       <h1 className="unseen">{title || 'Untitled session'}</h1>
-      <input
-        className="desk-title"
-        aria-label="Title"
-        value={title}
-        title={title}
-        placeholder="Untitled session"
-        maxLength={300}
-        spellCheck={false}
-        onChange={(event) =>
-          dispatch({
-            type: 'parts',
-            parts: [{ path: 'title', value: event.target.value || undefined }],
-            label: 'title',
-            typingAt: 'title',
-          })
-        }
-        onBlur={() => dispatch({ type: 'leave-field' })}
-      />
+      <span className="desk-title" data-text={title}>
+        <textarea
+          aria-label="Title"
+          rows={1}
+          value={title}
+          placeholder="Untitled session"
+          maxLength={300}
+          spellCheck={false}
+          onChange={(event) => set(event.target.value)}
+          onKeyDown={(event) => {
+            if (event.key !== 'Enter') return;
+            event.preventDefault();
+            event.currentTarget.blur();
+          }}
+          onBlur={() => dispatch({ type: 'leave-field' })}
+        />
+      </span>
     </>
   );
 }

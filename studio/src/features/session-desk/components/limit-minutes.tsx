@@ -21,7 +21,11 @@ export function LimitMinutes({ result, baseline }: Props) {
           </dt>
           <dd>
             <span className="num">{formatNumber(of(result, code), 1)}</span> min
-            {baseline && <span className="num before">{formatNumber(of(baseline, code), 1)}</span>}
+            {baseline && (
+              <span className="before">
+                was <span className="num">{formatNumber(of(baseline, code), 1)}</span>
+              </span>
+            )}
           </dd>
         </div>
       ))}

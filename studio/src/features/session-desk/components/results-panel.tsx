@@ -60,7 +60,7 @@ function LedgerSection({ drawing }: { drawing: Drawing }) {
     <section aria-labelledby="ledger-title">
       <div className="bar">
         <h2 id="ledger-title">Ledger</h2>
-        <span className="about">
+        <span className="aside">
           energy from the grid to the cells; each loss is one ledge, heights to scale above the break
         </span>
       </div>
