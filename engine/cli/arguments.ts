@@ -10,7 +10,7 @@ export type Command =
   | { name: 'help' };
 
 export const USAGE = `Usage:
-  voltiplano run STUDY.json [--json OUT.json|-] [--csv OUT.csv|-] [--every 10] [--rtol 5e-6]
+  voltiplano run STUDY.json [--json OUT.json|-] [--csv OUT.csv|-] [--every 10] [--rtol 2e-6]
       Runs a study. Without --json or --csv - prints a summary of one screen.
   voltiplano check STUDY.json
       Says whether a study is valid, and if not what is wrong, where, and the value found.

@@ -11,15 +11,15 @@ export type Accuracy = {
   around?: (derivative: Derivative) => Derivative;
 };
 
-const DEFAULT_RTOL = 5e-6;
+const DEFAULT_RTOL = 2e-6;
 const MAX_EVALUATIONS = 500_000;
 /**
  * Longest step as a multiple of the shortest time constant: on variations of the examples 4 saves a tenth of the evaluations
  * against 3, and beyond 5 odex rejects more steps than it saves (engine/MODEL.md, section 9).
  */
 const STABLE_STEPS = 4;
-/** Longest step at all [s]: the edges of controllers' bands and of tables inside longer ones cost up to 0.05 K. */
-const LONGEST_STEP_S = 45;
+/** Longest step at all [s]: inside longer ones narrow bands of controllers go unseen, which costs up to 0.2 K at 45 s. */
+const LONGEST_STEP_S = 30;
 /** First step after a start [s]. */
 const FIRST_STEP_S = 2;
 const USUAL_K = 30;
