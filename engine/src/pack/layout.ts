@@ -21,6 +21,7 @@ export type Layout = {
 /** The ledgers' integrals, in order [J]. */
 export const integralNames = [
   'station',
+  'battery',
   'inlet',
   'boostLoss',
   'auxiliaries',
@@ -29,7 +30,6 @@ export const integralNames = [
   'polarisation',
   'reversible',
   'rcPairs',
-  'battery',
   'chiller',
   'radiator',
   'ambient',
@@ -37,6 +37,9 @@ export const integralNames = [
 ] as const;
 
 export type IntegralName = (typeof integralNames)[number];
+
+/** Place of each integral behind `Layout.integrals`. */
+export const INTEGRAL = Object.fromEntries(integralNames.map((name, i) => [name, i])) as Record<IntegralName, number>;
 
 export function layoutOf(segments: number, pairs: number, twoNode: boolean): Layout {
   const core = 1;

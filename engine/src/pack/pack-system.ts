@@ -1,9 +1,23 @@
 import { cellCurves, type CellCurves } from '../cell/cell-curves.ts';
 import { CoolantLoop } from '../thermal/coolant-loop.ts';
 import type { Cell, Inlet, Pack, Strategy, Thermal } from '../study/schema.ts';
-import { layoutOf, type Layout } from './layout.ts';
+import { INTEGRAL, layoutOf, type Layout } from './layout.ts';
 
 const { exp } = Math;
+const {
+  battery: BATTERY,
+  inlet: INLET,
+  auxiliaries: AUXILIARIES,
+  busbar: BUSBAR,
+  ohmic: OHMIC,
+  polarisation: POLARISATION,
+  reversible: REVERSIBLE,
+  rcPairs: RC_PAIRS,
+  chiller: CHILLER,
+  radiator: RADIATOR,
+  ambient: AMBIENT,
+  heater: HEATER,
+} = INTEGRAL;
 const KELVIN = 273.15;
 const T25 = 298.15;
 const GAS_CONSTANT = 8.314462618;
@@ -223,18 +237,18 @@ export class PackSystem {
     const inletHeat = inletCurrent * inletCurrent * this.inletOhm;
     dy[inlet] = (inletHeat - this.inletToAir * (y[inlet] - ambient)) / this.inletJPerK;
     coolant.outC = theta;
-    dy[integrals + 1] = inletHeat;
-    dy[integrals + 3] = this.auxiliaryW;
-    dy[integrals + 4] = busbar;
-    dy[integrals + 5] = ohmic;
-    dy[integrals + 6] = polarisation;
-    dy[integrals + 7] = reversible;
-    dy[integrals + 8] = held;
-    dy[integrals + 9] = (this.restV + this.ohm * I) * I;
-    dy[integrals + 10] = coolant.chillerW;
-    dy[integrals + 11] = coolant.radiatorW;
-    dy[integrals + 12] = toAir;
-    dy[integrals + 13] = coolant.heaterW;
+    dy[integrals + BATTERY] = (this.restV + this.ohm * I) * I;
+    dy[integrals + INLET] = inletHeat;
+    dy[integrals + AUXILIARIES] = this.auxiliaryW;
+    dy[integrals + BUSBAR] = busbar;
+    dy[integrals + OHMIC] = ohmic;
+    dy[integrals + POLARISATION] = polarisation;
+    dy[integrals + REVERSIBLE] = reversible;
+    dy[integrals + RC_PAIRS] = held;
+    dy[integrals + CHILLER] = coolant.chillerW;
+    dy[integrals + RADIATOR] = coolant.radiatorW;
+    dy[integrals + AMBIENT] = toAir;
+    dy[integrals + HEATER] = coolant.heaterW;
   }
 
   /** Highest cell voltage at a current [V]. */

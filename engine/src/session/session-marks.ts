@@ -1,5 +1,6 @@
 import { findRoot } from '../integrate/find-root.ts';
 import type { Step } from '../integrate/stepper.ts';
+import { INTEGRAL } from '../pack/layout.ts';
 import type { Session } from '../study/schema.ts';
 import { Extreme } from './extreme.ts';
 import { J_PER_KWH } from './ledgers.ts';
@@ -84,14 +85,14 @@ export class SessionMarks {
       const tS = start < 0 ? findRoot(off, from, start, to, off(to), 1e-7) : from;
       this.atSoc.set(mark, {
         tS,
-        stationJ: step.dense(layout.integrals, tS),
-        batteryJ: step.dense(layout.integrals + 9, tS),
+        stationJ: step.dense(layout.integrals + INTEGRAL.station, tS),
+        batteryJ: step.dense(layout.integrals + INTEGRAL.battery, tS),
       });
       this.socWaiting = this.socWaiting.slice(1);
     }
     while (this.minuteWaiting.length > 0 && Number(this.minuteWaiting[0]) * 60 <= to) {
       const mark = this.minuteWaiting[0];
-      this.batteryJAt.set(mark, step.dense(layout.integrals + 9, Number(mark) * 60));
+      this.batteryJAt.set(mark, step.dense(layout.integrals + INTEGRAL.battery, Number(mark) * 60));
       this.minuteWaiting = this.minuteWaiting.slice(1);
     }
   }
@@ -103,8 +104,8 @@ export class SessionMarks {
   /** The session's headline numbers, from its end at `endS` with the whole state `y`. */
   metrics(endReason: EndReason, endS: number, y: readonly number[], session: Session): SessionMetrics {
     const { zLow, zSpan, layout } = this.solution.system.pack;
-    const stationJ = y[layout.integrals];
-    const batteryJ = y[layout.integrals + 9];
+    const stationJ = y[layout.integrals + INTEGRAL.station];
+    const batteryJ = y[layout.integrals + INTEGRAL.battery];
     const target = String(Math.round(session.targetSoc * 100)) as SocMark;
     if (endReason === 'target' && this.socWaiting[0] === target && Number(target) / 100 === session.targetSoc)
       this.atSoc.set(target, { tS: endS, stationJ, batteryJ });

@@ -1,9 +1,12 @@
+import { INTEGRAL } from '../pack/layout.ts';
 import { PackSystem } from '../pack/pack-system.ts';
 import { TaperTable } from '../strategy/taper-table.ts';
 import type { SessionStudy } from '../study/schema.ts';
 import { studyError } from '../study/study-error.ts';
 import { ChargeCurrent } from './charge-current.ts';
 import { checkAuxiliaries, decideBoost, inletOf, stateAtPlugIn } from './plug-in.ts';
+
+const { station: STATION, battery: BATTERY, boostLoss: BOOST_LOSS, ambient: AMBIENT } = INTEGRAL;
 
 /** Raised inside a trial step that ran out of the numbers' range; the run shortens its steps and tries again. */
 export class NotFinite extends Error {}
@@ -49,10 +52,10 @@ export class SessionSystem {
     pack.current = charge.current;
     pack.inletCurrent = stationCurrent;
     pack.rates(y, dy);
-    dy[integrals] = charge.stationVoltage * stationCurrent;
-    dy[integrals + 2] = charge.boostLossW;
+    dy[integrals + STATION] = charge.stationVoltage * stationCurrent;
+    dy[integrals + BOOST_LOSS] = charge.boostLossW;
     // Every state feeds one of these sums, so anything not finite shows here; odex would take NaN for converged.
-    const sum = dy[integrals + 9] + dy[integrals + 12] + pack.coolant.outC + y[inlet] + stationCurrent;
+    const sum = dy[integrals + BATTERY] + dy[integrals + AMBIENT] + pack.coolant.outC + y[inlet] + stationCurrent;
     if (!(sum - sum === 0)) throw new NotFinite();
   };
 

@@ -1,3 +1,4 @@
+import { INTEGRAL } from '../pack/layout.ts';
 import { PackSystem } from '../pack/pack-system.ts';
 import { inletOf } from '../session/plug-in.ts';
 import { NotFinite } from '../session/session-system.ts';
@@ -59,9 +60,9 @@ export class DriveSystem {
     pack.current = drive.current;
     pack.inletCurrent = 0;
     pack.rates(y, dy);
-    dy[integrals] = 0;
-    dy[integrals + 2] = 0;
-    const sum = dy[integrals + 9] + dy[integrals + 12] + pack.coolant.outC + y[inlet];
+    dy[integrals + INTEGRAL.station] = 0;
+    dy[integrals + INTEGRAL.boostLoss] = 0;
+    const sum = dy[integrals + INTEGRAL.battery] + dy[integrals + INTEGRAL.ambient] + pack.coolant.outC + y[inlet];
     if (!(sum - sum === 0)) throw new NotFinite();
   };
 
