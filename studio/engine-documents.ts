@@ -4,6 +4,7 @@ import type { Plugin } from 'vite';
 /** Documents of the engine that the studio serves beside its pages, by address. */
 const documents = {
   'study.schema.json': { file: '../engine/schema/study.schema.json', type: 'application/schema+json' },
+  'model.md': { file: '../engine/MODEL.md', type: 'text/markdown; charset=utf-8' },
 } as const;
 
 type Name = keyof typeof documents;

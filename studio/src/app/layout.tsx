@@ -16,6 +16,7 @@ export function Layout() {
         </Link>
         <nav aria-label="Main">
           <NavLink to="/try">Session desk</NavLink>
+          <NavLink to="/model">The model</NavLink>
           <NavLink to="/schema">Schema</NavLink>
         </nav>
         <div className="top-right">

@@ -25,6 +25,10 @@ export const router = createBrowserRouter([
             }),
           },
           {
+            path: '/model',
+            lazy: async () => ({ Component: (await import('../features/model/model-page.tsx')).ModelPage }),
+          },
+          {
             path: '/schema',
             lazy: async () => ({ Component: (await import('../features/schema/schema-page.tsx')).SchemaPage }),
           },

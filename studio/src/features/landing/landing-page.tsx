@@ -36,7 +36,7 @@ export function LandingPage() {
               <Link to="/try">Open the desk</Link>
             </Button>
             <Button asChild>
-              <Link to="/schema">See the study file</Link>
+              <Link to="/model">Read the model</Link>
             </Button>
           </div>
         </div>
