@@ -15,5 +15,11 @@ export default defineConfig({
     assetsInlineLimit: 0,
     // Plotly alone is about 4.5 MB and loads only where strips are drawn.
     chunkSizeWarningLimit: 5000,
+    rolldownOptions: {
+      // A page that takes a table from the engine takes that table, not every schema: nothing happens on import.
+      treeshake: { moduleSideEffects: [{ test: /\/engine\/src\//, sideEffects: false }] },
+      // zod is told to do without eval in the chunk it stands in, so before any schema is made.
+      output: { codeSplitting: { groups: [{ name: 'zod', test: /node_modules\/zod\/|zod-without-eval/ }] } },
+    },
   },
 });

@@ -1,4 +1,3 @@
-import './lib/zod-without-eval.ts';
 import './styles/fonts.ts';
 import './styles/index.css';
 import { StrictMode } from 'react';

@@ -1,3 +1,4 @@
+import '../../lib/zod-without-eval.ts';
 import './session-desk.css';
 import { useEffect, useState } from 'react';
 import { PageTitle } from '../../components/page-title.tsx';
