@@ -1,6 +1,7 @@
 import { linePath } from './svg-path.ts';
 import { rangeAround } from './ticks.ts';
 import { formatNumber } from '../lib/format.ts';
+import { figureWidth } from './label-fit.ts';
 import { Label } from './label.tsx';
 
 type Props = {
@@ -18,6 +19,7 @@ type Props = {
   digits?: number;
 };
 
+/** Least room for the ticks at the left [px]; wider figures take more. */
 const GUTTER = 40;
 
 /** A small line chart beside an editable table. */
@@ -33,28 +35,34 @@ export function MiniChart({
 }: Props) {
   const finite = y.filter(Number.isFinite);
   if (finite.length < 2) return null;
-  const [low, high] = rangeAround(Math.min(...finite), Math.max(...finite), 3);
+  const least = Math.min(...finite);
+  const greatest = Math.max(...finite);
+  // A level table gets an axis about its value, with two ticks that read differently.
+  const air = greatest - least < 10 ** -digits ? Math.max(10 ** -digits, Math.abs(greatest) * 0.1) : 0;
+  const [low, high] = rangeAround(least - air, greatest + air, 3);
+  const ticks = [low, high].map((value) => ({ value, text: formatNumber(value, digits) }));
+  const gutter = Math.max(GUTTER, ...ticks.map(({ text }) => figureWidth(text) + 10));
   const from = x[0]!;
   const to = x[x.length - 1]!;
   const foot = height - 18;
-  const px = (value: number) => GUTTER + ((value - from) / (to - from || 1)) * (width - GUTTER - 6);
+  const px = (value: number) => gutter + ((value - from) / (to - from || 1)) * (width - gutter - 6);
   const py = (value: number) => 6 + (foot - 6) * (1 - (value - low) / (high - low));
   return (
     <svg className="block max-w-full" viewBox={`0 0 ${width} ${height}`} width={width} role="img" aria-label={label}>
-      {[low, high].map((value) => (
+      {ticks.map(({ value, text }) => (
         <g key={value}>
-          <line x1={GUTTER} x2={width - 6} y1={py(value)} y2={py(value)} stroke="var(--rule)" strokeWidth={0.8} />
-          <Label x={GUTTER - 6} y={py(value) + 4} anchor="end" figure>
-            {formatNumber(value, digits)}
+          <line x1={gutter} x2={width - 6} y1={py(value)} y2={py(value)} stroke="var(--rule)" strokeWidth={0.8} />
+          <Label x={gutter - 6} y={value === low ? foot : py(value) + 4} anchor="end" figure>
+            {text}
           </Label>
         </g>
       ))}
-      <line x1={GUTTER} x2={width - 6} y1={foot} y2={foot} stroke="var(--ink)" />
-      <Label x={GUTTER} y={height - 4} figure>
-        {String(from)}
+      <line x1={gutter} x2={width - 6} y1={foot} y2={foot} stroke="var(--ink)" />
+      <Label x={gutter} y={height - 4} figure>
+        {endText(from)}
       </Label>
       <Label x={width - 6} y={height - 4} anchor="end" figure>
-        {String(to)}
+        {endText(to)}
       </Label>
       <path
         d={linePath(x.map((value, i) => [px(value), py(y[i]!)]))}
@@ -74,3 +82,6 @@ export function MiniChart({
     </svg>
   );
 }
+
+/** An end of the axis: as many decimals as it has, three at most. */
+const endText = (value: number) => formatNumber(value, [0, 1, 2].find((n) => Number(value.toFixed(n)) === value) ?? 3);

@@ -150,24 +150,31 @@ type SpanNamesProps = {
   layout: HeroLayout;
 };
 
-/** Name and minutes of each limit on the ground, or over the curve where its bed comes down too far. */
+/**
+ * Name and minutes of each limit on the ground. Where its bed comes down too far they stand behind the end of the
+ * curve, still on the ground, or else over the curve.
+ */
 function SpanNames({ spans, xs, ys, layout }: SpanNamesProps) {
-  const { x, foot, phone } = layout;
+  const { x, foot, phone, right } = layout;
   return spans.map((span) => {
     const name = limitLabel(span.code);
     const width = textWidth(name, 13);
-    const left = x(span.from) + 8;
-    if (x(span.to) - left < width + 6) return null;
-    const end = placeOn(xs, left + width).index;
+    const inside = x(span.from) + 8;
+    if (x(span.to) - inside < width + 6) return null;
+    const end = placeOn(xs, inside + width).index;
     const lowest = Math.max(...ys.slice(span.fromRow, end + 1)) + (phone ? 14 : 26);
     const highest = Math.min(...ys.slice(span.fromRow, end + 1));
-    const y = lowest > foot - 42 ? highest - 12 : foot - 10;
+    const hasRoom = lowest <= foot - 42;
+    const behind = x(span.to) + 8;
+    const isBehind = !hasRoom && span === spans[spans.length - 1] && behind + width < right;
+    const left = isBehind ? behind : inside;
+    const y = hasRoom || isBehind ? foot - 10 : highest - 12;
     return (
       <Fragment key={span.fromRow}>
-        <Label x={left} y={y - 17} figure halo={y < foot - 10}>
+        <Label x={left} y={y - 17} figure halo={!hasRoom}>
           {`${formatNumber(span.to - span.from, 1)} min`}
         </Label>
-        <Label x={left} y={y} ink="var(--ink)" weight={500} size={13} halo={y < foot - 10}>
+        <Label x={left} y={y} ink="var(--ink)" weight={500} size={13} halo={!hasRoom}>
           {name}
         </Label>
       </Fragment>

@@ -1,7 +1,7 @@
 import { useState } from 'react';
 import { exportDrawing, type ExportFormat } from '../../../charts/chart-export.ts';
 import { Button } from '../../../components/button.tsx';
-import { Menu, MenuHeading, MenuItem } from '../../../components/menu.tsx';
+import { Menu, MenuItem, MenuRule } from '../../../components/menu.tsx';
 import { useRun, useRuns } from '../hooks/run-context.ts';
 import { downloadText } from '../hooks/use-study-files.ts';
 import { resultFile, seriesFile } from '../model/export-files.ts';
@@ -49,7 +49,7 @@ export function ExportMenu({ stripsRef, ledgerRef }: Drawings) {
 function DrawingItems({ part, onDraw }: { part: string; onDraw: (format: ExportFormat) => void }) {
   return (
     <>
-      <MenuHeading>{part}</MenuHeading>
+      <MenuRule />
       {FORMATS.map((format) => (
         <MenuItem key={format} onSelect={() => onDraw(format)}>
           {`${part.charAt(0).toUpperCase()}${part.slice(1)} as ${format.toUpperCase()}`}

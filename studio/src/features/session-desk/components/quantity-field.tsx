@@ -5,8 +5,8 @@ import type { FieldSpec } from '../model/input-sections.ts';
 import { HeldNote } from './held-note.tsx';
 
 /** The field of one quantity of the study. */
-export function QuantityField({ path, sets, label }: FieldSpec) {
-  const field = useQuantityField(path, label);
+export function QuantityField({ path, sets, label, emptyAs }: FieldSpec) {
+  const field = useQuantityField(path, label, emptyAs);
   const unusual = unusualText(field.text, field.usual, field.help.usual);
   return (
     <NumberField

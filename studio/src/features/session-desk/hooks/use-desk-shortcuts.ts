@@ -16,6 +16,7 @@ export const deskShortcuts: { keys: string; does: string }[] = [
   { keys: 'Alt ↑ ↓', does: 'in a table: move the row' },
   { keys: 'Alt Delete', does: 'in a table: delete the row' },
   { keys: '← →', does: 'on the strips: move the cursor' },
+  { keys: '+ − 0', does: 'on the strips: closer, wider, the whole session' },
 ];
 
 /** Listens for the desk's keys while it is on the page. */

@@ -19,14 +19,17 @@ import { valueAt } from '../model/study-path.ts';
 import { useDesk, useDispatch } from './use-desk.ts';
 
 /** Everything the field of one quantity shows, and what it does with what is typed. */
-export function useQuantityField(path: string, label?: string) {
+export function useQuantityField(path: string, label?: string, emptyAs = path) {
   const dispatch = useDispatch();
   const { temperatureUnit } = useUnits();
   const entry = useDesk((state) => entryAt(state.sheet.draft, path));
   const waits = useDesk((state) => path in state.sheet.draft.pending);
   const issue = useDesk((state) => issuesOf(state.sheet.draft).find((one) => one.path === path));
   const elsewhere = useDesk((state) => (waits ? issuesOf(state.sheet.draft)[0] : undefined));
-  const filled = useDesk((state) => valueAt(filledOf(state.sheet.draft.study), path)) as number | undefined;
+  const filled = useDesk(({ sheet: { draft } }) => {
+    const study = filledOf(draft.study);
+    return valueAt(study, path) ?? valueAt(study, emptyAs);
+  }) as number | undefined;
   const before = useDesk((state) => (state.sheet.baseline ? valueAt(state.sheet.baseline, path) : undefined));
   const moved = useDesk((state) => isMoved(entryAt(state.sheet.draft, path), state.sheet.baseline, path));
 

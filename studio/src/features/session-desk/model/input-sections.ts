@@ -1,7 +1,14 @@
 import type { LimitCode, SessionStudyInput } from '@voltiplano/engine';
 
-/** One numeric input of the desk; `sets` names the limit it sets, whose swatch and minutes stand beside it. */
-export type FieldSpec = { path: string; sets?: LimitCode; label?: string };
+/** One numeric input of the desk. */
+export type FieldSpec = {
+  path: string;
+  /** The limit it sets, whose swatch and minutes stand beside it. */
+  sets?: LimitCode;
+  label?: string;
+  /** Path of the input whose value holds while this one is empty. */
+  emptyAs?: string;
+};
 
 /** The parts of the inputs, in the order of the chain from station to cell. */
 export const sectionNames = [
@@ -134,7 +141,12 @@ export const sections: Record<SectionName, SectionSpec> = {
     title: 'Session',
     side: null,
     fields: [at('session.ambientC'), at('session.startTempC'), at('session.startSoc'), at('session.targetSoc')],
-    more: [at('session.coolantStartC'), at('session.maxMin'), at('session.hotelW'), at('session.whPerKm')],
+    more: [
+      { path: 'session.coolantStartC', emptyAs: 'session.startTempC' },
+      at('session.maxMin'),
+      at('session.hotelW'),
+      at('session.whPerKm'),
+    ],
     covers: ['session'],
   },
 };
