@@ -229,7 +229,7 @@ export const chargeQuantities = {
     PRACTICE,
     'above',
   ),
-  'session.hotelW': q('Vehicle at rest', 'W', 0, 50000, 'Electronics and cabin while charging.', [200, 2000], PRACTICE),
+  'session.hotelW': q('Auxiliary load', 'W', 0, 50000, 'Electronics and cabin while charging.', [200, 2000], PRACTICE),
   'session.whPerKm': q(
     'Consumption',
     'Wh/km',

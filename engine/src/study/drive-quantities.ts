@@ -32,7 +32,7 @@ export const driveQuantities = {
     [0.6, 0.9],
     PRACTICE,
   ),
-  'vehicle.hotelW': q('Vehicle at rest', 'W', 0, 50000, 'Electronics, always on.', [200, 600], PRACTICE),
+  'vehicle.hotelW': q('Auxiliary load', 'W', 0, 50000, 'Electronics, always on.', [200, 600], PRACTICE),
   'vehicle.cabinWPerAmbient.tempC[]': q('Ambient', '°C', -60, 70, 'Ambient of this row.', [-20, 40], PRACTICE),
   'vehicle.cabinWPerAmbient.watts[]': q(
     'Cabin',

@@ -23,7 +23,7 @@ export const packQuantities = {
     'survey, Steinhardt et al., J. Power Sources 522 (2022) 230829',
   ),
   'cell.r0Milliohm': q(
-    'Resistance, at once',
+    'Ohmic resistance, R0',
     'mΩ',
     0,
     1000,

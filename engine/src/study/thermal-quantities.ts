@@ -223,7 +223,7 @@ export const thermalQuantities = {
     PRACTICE,
   ),
   'inlet.resistanceMilliohm': q(
-    'Resistance',
+    'Inlet resistance',
     'mΩ',
     0,
     100,
@@ -232,7 +232,7 @@ export const thermalQuantities = {
     PRACTICE,
   ),
   'inlet.heatCapacityJPerK': q(
-    'Heat capacity',
+    'Inlet heat capacity',
     'J/K',
     0,
     1e6,
