@@ -1,6 +1,6 @@
 import { type ChildProcess, spawn } from 'node:child_process';
 import { once } from 'node:events';
-import { existsSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdtempSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { tmpdir } from 'node:os';
@@ -88,6 +88,66 @@ describe('main', () => {
       const [code] = await once(child, 'close');
       expect(code).toBe(1);
       expect(output().stderr).toMatch(/^The studio is not built in .*none\. Build it with "npm run build"\.\n$/);
+    },
+    START_PATIENCE_MS,
+  );
+
+  it(
+    'keeps its database and secrets in DATA_DIR, is ready, and offers the local mailbox',
+    async () => {
+      const { address, output } = start({});
+      const ready = await fetch(`${await address}/api/ready`);
+      expect(await ready.json()).toEqual({ status: 'ready' });
+      expect(existsSync(path.join(dir, 'data/voltiplano.db'))).toBe(true);
+      expect(statSync(path.join(dir, 'data/secret.key')).mode & 0o777).toBe(0o600);
+      expect(output().stdout).toContain(`${await address}/api/v1/dev/mailbox`);
+      expect((await fetch(`${await address}/api/v1/dev/mailbox`)).status).toBe(200);
+    },
+    START_PATIENCE_MS,
+  );
+
+  it(
+    'has neither mailbox nor local provider in production',
+    async () => {
+      const { address, output } = start({
+        NODE_ENV: 'production',
+        PUBLIC_URL: 'https://volt.example',
+        SMTP_URL: 'smtp://127.0.0.1:9',
+      });
+      const options = await fetch(`${await address}/api/v1/auth/options`);
+      expect(await options.json()).toEqual({ provider: null, mailboxUrl: null });
+      for (const gone of ['dev/mailbox', 'auth/oidc/start', 'auth/oidc/callback']) {
+        expect((await fetch(`${await address}/api/v1/${gone}`)).status).toBe(404);
+      }
+      expect(output().stdout).not.toContain('mailbox');
+    },
+    START_PATIENCE_MS,
+  );
+
+  it(
+    'gives cookies to https only where its public address is https',
+    async () => {
+      const { address } = start({ PUBLIC_URL: 'https://volt.example' });
+      const response = await fetch(`${await address}/api/v1/auth/sign-up`, {
+        method: 'POST',
+        headers: { 'Content-Type': 'application/json', Origin: 'https://volt.example' },
+        body: JSON.stringify({ email: 'a@b.example', name: 'A', password: 'a windy plateau', workspaceName: 'A' }),
+      });
+      expect(response.status).toBe(201);
+      const cookies = response.headers.getSetCookie();
+      expect(cookies).toHaveLength(3);
+      for (const cookie of cookies) expect(cookie).toMatch(/; Secure/);
+    },
+    START_PATIENCE_MS,
+  );
+
+  it(
+    'says which setting production lacks and ends with 1',
+    async () => {
+      const { child, output } = start({ NODE_ENV: 'production' });
+      const [code] = await once(child, 'close');
+      expect(code).toBe(1);
+      expect(output().stderr).toBe('PUBLIC_URL is missing: set it to the address that people open.\n');
     },
     START_PATIENCE_MS,
   );

@@ -1,8 +1,13 @@
-/** Answer of `GET /api/health`. */
-export type Health = {
-  status: 'ok';
-  /** Version of the server, as in its package.json. */
-  version: string;
-  /** Time since the application was made [s]. */
-  uptimeS: number;
-};
+import { z } from 'zod';
+
+export const healthSchema = z
+  .object({
+    status: z.literal('ok'),
+    version: z.string().meta({ description: 'Version of the server' }),
+    uptimeS: z.number().meta({ description: 'Time since the start [s]' }),
+  })
+  .meta({ id: 'Health' });
+export type Health = z.infer<typeof healthSchema>;
+
+export const readinessSchema = z.object({ status: z.literal('ready') }).meta({ id: 'Readiness' });
+export type Readiness = z.infer<typeof readinessSchema>;

@@ -4,21 +4,25 @@ import path from 'node:path';
 import { pino } from 'pino';
 import request from 'supertest';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { openDatabase } from '../db/database.ts';
+import { startTestServer, type TestServer } from '../testing/test-server.ts';
 import { createApp } from './app.ts';
 
 let studioDir: string;
 let nowMs = 0;
 let logged: string[] = [];
+let server: TestServer;
 
 const INDEX = '<!doctype html><title>Voltiplano</title>';
 const HTML = 'text/html,application/xhtml+xml,*/*;q=0.8';
 
-function app() {
+function app(clock = () => nowMs) {
   const logger = pino({ level: 'info' }, { write: (line: string) => void logged.push(line) });
-  return createApp({ studioDir, version: '1.2.3', logger, nowMs: () => nowMs });
+  return createApp({ ...server.appDeps, studioDir, core: { ...server.core, logger }, nowMs: clock });
 }
 
-beforeAll(() => {
+beforeAll(async () => {
+  server = await startTestServer();
   studioDir = mkdtempSync(path.join(tmpdir(), 'voltiplano-studio-'));
   mkdirSync(path.join(studioDir, 'assets'));
   writeFileSync(path.join(studioDir, 'index.html'), INDEX);
@@ -27,8 +31,9 @@ beforeAll(() => {
   writeFileSync(path.join(studioDir, '.secret'), 'no');
 });
 
-afterAll(() => {
+afterAll(async () => {
   rmSync(studioDir, { recursive: true });
+  await server.close();
 });
 
 describe('GET /api/health', () => {
@@ -39,6 +44,22 @@ describe('GET /api/health', () => {
     const res = await request(running).get('/api/health').expect(200);
     expect(res.body).toEqual({ status: 'ok', version: '1.2.3', uptimeS: 2.5 });
     expect(res.headers['cache-control']).toBe('no-store');
+  });
+});
+
+describe('GET /api/ready', () => {
+  it('answers once every migration is applied', async () => {
+    const res = await request(app()).get('/api/ready').expect(200);
+    expect(res.body).toEqual({ status: 'ready' });
+  });
+
+  it('answers a problem on a database without its schema, and on one that is closed', async () => {
+    const empty = openDatabase(':memory:');
+    const deps = { ...server.appDeps, studioDir, core: { ...server.core, db: empty } };
+    const before = await request(createApp(deps)).get('/api/ready').expect(503);
+    expect(JSON.parse(before.text)).toMatchObject({ code: 'NOT_READY' });
+    await empty.destroy();
+    await request(createApp(deps)).get('/api/ready').expect(503);
   });
 });
 
@@ -115,12 +136,7 @@ describe('problems', () => {
 
   it('hides the text of an unforeseen error and logs it under the request id', async () => {
     logged = [];
-    const broken = createApp({
-      studioDir,
-      version: '1.2.3',
-      logger: pino({ level: 'info' }, { write: (line: string) => void logged.push(line) }),
-      nowMs: failsAfterStart(),
-    });
+    const broken = app(failsAfterStart());
     const res = await request(broken).get('/api/health').expect(500);
     expect(res.text).not.toContain('clock stopped');
     expect(JSON.parse(res.text)).toMatchObject({ code: 'INTERNAL', status: 500 });

@@ -1,18 +1,31 @@
 import { STATUS_CODES } from 'node:http';
 import type { ErrorRequestHandler, RequestHandler } from 'express';
-import type { Problem, ProblemCode } from '../contract/problem.ts';
+import type { z } from 'zod';
+import { type FieldError, type Problem, type ProblemCode, problemCodes } from '../contract/problem.ts';
 
-const STATUS: Record<ProblemCode, number> = { BAD_REQUEST: 400, NOT_FOUND: 404, INTERNAL: 500 };
-
-/** Thrown by a route to answer a problem. The detail is shown to the person who asked. */
+/** Thrown by a route or service to answer a problem. The detail is shown to the person who asked. */
 export class HttpProblem extends Error {
   override name = 'HttpProblem';
   readonly code: ProblemCode;
+  readonly errors: FieldError[] | undefined;
 
-  constructor(code: ProblemCode, detail: string, options?: ErrorOptions) {
+  constructor(code: ProblemCode, detail: string, options?: ErrorOptions & { errors?: FieldError[] }) {
     super(detail, options);
     this.code = code;
+    this.errors = options?.errors;
   }
+}
+
+/** The problem of a value that a schema refused. @param part  part of the request that held it, such as `body` */
+export function invalidInput(part: string, { issues }: z.ZodError): HttpProblem {
+  const errors = issues.map(({ path, message }) => ({ path: [part, ...path].join('.'), message }));
+  const [first] = errors;
+  return new HttpProblem('INVALID_INPUT', first ? `${first.path}: ${first.message}` : 'A field is wrong.', { errors });
+}
+
+/** The problem of one field that only a service can judge. */
+export function invalidField(path: string, message: string): HttpProblem {
+  return new HttpProblem('INVALID_INPUT', `${path}: ${message}`, { errors: [{ path, message }] });
 }
 
 /** Ends the chain of routes: whatever nobody answered is not there. */
@@ -26,7 +39,7 @@ export const answerProblem: ErrorRequestHandler = (error: unknown, req, res, nex
     next(error);
     return;
   }
-  const { status, code, detail } = describeError(error);
+  const { status, code, detail, errors } = describeError(error);
   if (status >= 500) req.log.error({ err: error }, 'request failed');
   const problem: Problem = {
     type: 'about:blank',
@@ -35,15 +48,20 @@ export const answerProblem: ErrorRequestHandler = (error: unknown, req, res, nex
     detail,
     code,
     requestId: res.get('X-Request-Id') ?? '',
+    errors,
   };
   res.status(status).set('Cache-Control', 'no-store').type('application/problem+json').send(JSON.stringify(problem));
 };
 
-function describeError(error: unknown): Pick<Problem, 'status' | 'code' | 'detail'> {
-  if (error instanceof HttpProblem) return { status: STATUS[error.code], code: error.code, detail: error.message };
+function describeError(error: unknown): Pick<Problem, 'status' | 'code' | 'detail' | 'errors'> {
+  if (error instanceof HttpProblem) {
+    const { code, message, errors } = error;
+    return { status: problemCodes[code].status, code, detail: message, errors };
+  }
   // Express and what it stands on mark the client's mistakes with a status, such as 416 for a range outside a file.
-  const status = error instanceof Error && 'status' in error ? Number(error.status) : STATUS.INTERNAL;
+  const status = error instanceof Error && 'status' in error ? Number(error.status) : 500;
+  if (status === 413) return { status, code: 'BODY_TOO_LARGE', detail: 'The body is larger than the server takes.' };
   if (status >= 400 && status < 500) return { status, code: 'BAD_REQUEST', detail: 'The request cannot be answered.' };
   const detail = 'The server could not answer. The request id finds the reason in its log.';
-  return { status: STATUS.INTERNAL, code: 'INTERNAL', detail };
+  return { status: 500, code: 'INTERNAL', detail };
 }

@@ -15,8 +15,17 @@ export function requestLog(logger: Logger): RequestHandler {
     customLogLevel: (_req, res, error) => (error || res.statusCode >= 500 ? 'error' : 'info'),
     autoLogging: { ignore: (req) => req.url === '/api/health' },
     serializers: {
-      req: (req: { id: string; method: string; url: string }) => ({ id: req.id, method: req.method, url: req.url }),
+      req: (req: { id: string; method: string; url: string }) => ({
+        id: req.id,
+        method: req.method,
+        url: loggedUrl(req.url),
+      }),
       res: (res: { statusCode: number }) => ({ statusCode: res.statusCode }),
     },
   });
+}
+
+/** What stands behind the ? while somebody signs in is a secret of that sign-in. */
+function loggedUrl(url: string): string {
+  return url.startsWith('/api/v1/auth/') ? url.replace(/\?.*$/, '?…') : url;
 }

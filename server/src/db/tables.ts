@@ -1,0 +1,135 @@
+import type { ColumnType, Generated } from 'kysely';
+import type { Role } from '../contract/roles.ts';
+
+/** Moment [ms since 1970-01-01T00:00Z]. */
+type Moment = number;
+/** Set once, never changed. */
+type Fixed<T> = ColumnType<T, T, never>;
+
+type PeopleTable = {
+  id: Fixed<string>;
+  email: string;
+  /** When the person followed a link mailed to that address, or a provider vouched for it. */
+  emailProvenAt: Moment | null;
+  name: string;
+  /** Argon2id; null for a person who signs in through a provider only. */
+  passwordHash: string | null;
+  createdAt: Fixed<Moment>;
+};
+
+/** A device on which a person signed in; the family of its refresh tokens. */
+type SessionsTable = {
+  id: Fixed<string>;
+  personId: Fixed<string>;
+  userAgent: string;
+  createdAt: Fixed<Moment>;
+  lastUsedAt: Moment;
+  expiresAt: Moment;
+  endedAt: Moment | null;
+};
+
+type RefreshTokensTable = {
+  tokenHash: Fixed<string>;
+  sessionId: Fixed<string>;
+  createdAt: Fixed<Moment>;
+  spentAt: Moment | null;
+};
+
+type OneTimeLinksTable = {
+  tokenHash: Fixed<string>;
+  personId: Fixed<string>;
+  purpose: Fixed<'reset-password' | 'change-email'>;
+  newEmail: Fixed<string | null>;
+  createdAt: Fixed<Moment>;
+  expiresAt: Fixed<Moment>;
+  usedAt: Moment | null;
+};
+
+type IdentitiesTable = {
+  issuer: Fixed<string>;
+  subject: Fixed<string>;
+  personId: Fixed<string>;
+  createdAt: Fixed<Moment>;
+};
+
+type WorkspacesTable = { id: Fixed<string>; name: string; createdAt: Fixed<Moment> };
+
+type MembersTable = {
+  workspaceId: Fixed<string>;
+  personId: Fixed<string>;
+  role: Role;
+  joinedAt: Fixed<Moment>;
+};
+
+type InvitationsTable = {
+  id: Fixed<string>;
+  workspaceId: Fixed<string>;
+  email: Fixed<string>;
+  role: Role;
+  tokenHash: string;
+  invitedBy: string | null;
+  createdAt: Fixed<Moment>;
+  expiresAt: Moment;
+  acceptedAt: Moment | null;
+  withdrawnAt: Moment | null;
+};
+
+type ApiTokensTable = {
+  id: Fixed<string>;
+  workspaceId: Fixed<string>;
+  personId: Fixed<string>;
+  name: string;
+  role: Fixed<Role>;
+  tokenHash: Fixed<string>;
+  createdAt: Fixed<Moment>;
+  expiresAt: Fixed<Moment>;
+  lastUsedAt: Moment | null;
+  revokedAt: Moment | null;
+};
+
+type ActivityTable = {
+  /** Order of happening; pages are cut by it. */
+  seq: Generated<number>;
+  id: Fixed<string>;
+  workspaceId: Fixed<string>;
+  personId: Fixed<string | null>;
+  action: Fixed<string>;
+  subjectId: Fixed<string | null>;
+  /** JSON object. */
+  detail: Fixed<string>;
+  createdAt: Fixed<Moment>;
+};
+
+type KeptAnswersTable = {
+  keyHash: Fixed<string>;
+  requestHash: Fixed<string>;
+  status: Fixed<number>;
+  sealedBody: Fixed<Buffer>;
+  createdAt: Fixed<Moment>;
+};
+
+type OutboxTable = {
+  id: Fixed<string>;
+  recipient: Fixed<string>;
+  subject: Fixed<string>;
+  sealedText: Fixed<Buffer>;
+  createdAt: Fixed<Moment>;
+  tries: number;
+  nextTryAt: Moment;
+};
+
+/** The schema as the migrations leave it. */
+export type Tables = {
+  people: PeopleTable;
+  sessions: SessionsTable;
+  refreshTokens: RefreshTokensTable;
+  oneTimeLinks: OneTimeLinksTable;
+  identities: IdentitiesTable;
+  workspaces: WorkspacesTable;
+  members: MembersTable;
+  invitations: InvitationsTable;
+  apiTokens: ApiTokensTable;
+  activity: ActivityTable;
+  keptAnswers: KeptAnswersTable;
+  outbox: OutboxTable;
+};

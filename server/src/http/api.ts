@@ -1,0 +1,149 @@
+import express, { type Request, type Response, Router } from 'express';
+import type { z } from 'zod';
+import type { AnswerOf, BodyOf, Endpoint, ParamsOf, QueryOf } from '../contract/endpoint.ts';
+import type { Core } from '../core.ts';
+import { inTransaction } from '../db/database.ts';
+import { WorkspaceAccess } from '../workspaces/workspace-access.ts';
+import type { Actor, SessionActor } from './actor.ts';
+import { authenticate } from './authenticate.ts';
+import { findKeptAnswer, keepAnswer, type KeptAnswer, type KeyedCall } from './kept-answers.ts';
+import { HttpProblem, invalidField, invalidInput } from './problem.ts';
+import { type RateLimits, rateLimiters } from './rate-limits.ts';
+import { refuseOtherSites, requireCsrfToken, type Site } from './same-site.ts';
+
+/** Studies and library entries are JSON of some kilobytes; files go another way. */
+const BODY_LIMIT = '1mb';
+
+/** Returned by a handler that has written the answer itself. */
+export const ANSWERED = { isAnswered: true } as const;
+
+type ActorOf<E extends Endpoint> = E['access'] extends 'anyone'
+  ? null
+  : E['access'] extends 'session'
+    ? SessionActor
+    : Actor;
+type AccessOf<E extends Endpoint> = E['access'] extends 'anyone' | 'session' ? null : WorkspaceAccess;
+
+/** One call, judged and parsed. */
+export type Call<E extends Endpoint> = {
+  params: ParamsOf<E>;
+  query: QueryOf<E>;
+  body: BodyOf<E>;
+  actor: ActorOf<E>;
+  /** Access to the workspace in the path, with the capability that the endpoint names. */
+  access: AccessOf<E>;
+  /** Its `db` is a transaction where the endpoint creates something. */
+  core: Core;
+  req: Request;
+  res: Response;
+};
+
+type Result<E extends Endpoint> = (E extends { answer: z.ZodType } ? AnswerOf<E> : void) | typeof ANSWERED;
+export type Handler<E extends Endpoint> = (call: Call<E>) => Result<E> | Promise<Result<E>>;
+
+type ApiDeps = { core: Core; site: Site; rateLimits: RateLimits };
+
+/** Mounts endpoints: each is judged, parsed and answered as its description says, so that no route can forget it. */
+export class Api {
+  readonly router = Router();
+  private readonly deps: ApiDeps;
+  private readonly limiters: ReturnType<typeof rateLimiters>;
+
+  constructor(deps: ApiDeps) {
+    this.deps = deps;
+    this.limiters = rateLimiters(deps.rateLimits);
+    this.router.use(express.json({ limit: BODY_LIMIT }));
+  }
+
+  serve<E extends Endpoint>(endpoint: E, handler: Handler<E>): void {
+    const limiters = endpoint.limited ? this.limiters[endpoint.limited] : [];
+    this.router[endpoint.method](endpoint.path, ...limiters, async (req, res) => {
+      await this.answer(endpoint, handler, req, res);
+    });
+  }
+
+  private async answer<E extends Endpoint>(endpoint: E, handler: Handler<E>, req: Request, res: Response) {
+    const { core } = this.deps;
+    res.set('Cache-Control', 'no-store');
+    const actor = await this.admit(endpoint, req);
+    const params = parseParams(endpoint, req);
+    const access = actor ? await openAccess(core, endpoint, actor, params) : null;
+    const query = parse('query', endpoint.query, req.query);
+    const body = parse('body', endpoint.body, req.body ?? {});
+    const run = (inner: Core) => handler({ params, query, body, actor, access, core: inner, req, res } as Call<E>);
+    const call = actor && endpoint.creates ? keyedCall(req, actor, body) : null;
+    const { status, answer } = call
+      ? await runKeyed(core, call, endpoint.status, run)
+      : { status: endpoint.status, answer: await runPlain(core, endpoint, run) };
+    if (answer === ANSWERED) return;
+    if (answer === undefined) res.status(status).end();
+    else res.status(status).json(answer);
+  }
+
+  /** Who calls, or null where anyone may. @throws {HttpProblem} if they may not */
+  private async admit({ access, method }: Endpoint, req: Request): Promise<Actor | null> {
+    const { core, site } = this.deps;
+    const changes = method !== 'get';
+    if (changes && !req.get('authorization')) refuseOtherSites(req, site);
+    if (access === 'anyone') return null;
+    const actor = await authenticate(core, req);
+    if (actor.kind === 'session' && changes) requireCsrfToken(req, core.secrets, actor.sessionId);
+    if (access === 'session' && actor.kind !== 'session') {
+      throw new HttpProblem('SESSION_REQUIRED', 'Only a signed-in person may do this, an API token may not.');
+    }
+    return actor;
+  }
+}
+
+async function openAccess(core: Core, { access }: Endpoint, actor: Actor, params: unknown) {
+  if (access === 'anyone' || access === 'session') return null;
+  const { workspaceId } = params as { workspaceId: string };
+  const opened = await WorkspaceAccess.open(core.db, actor, workspaceId);
+  opened.require(access);
+  return opened;
+}
+
+/** A path with something that is no identifier leads nowhere. */
+function parseParams({ params }: Endpoint, req: Request): unknown {
+  if (!params) return undefined;
+  const parsed = params.safeParse(req.params);
+  if (!parsed.success) throw new HttpProblem('NOT_FOUND', 'There is no such thing, or not for you.');
+  return parsed.data;
+}
+
+function parse(part: string, schema: z.ZodObject | undefined, value: unknown): unknown {
+  if (!schema) return undefined;
+  const parsed = schema.safeParse(value);
+  if (!parsed.success) throw invalidInput(part, parsed.error);
+  return parsed.data;
+}
+
+function runPlain<T>(core: Core, { creates }: Endpoint, run: (core: Core) => T | Promise<T>): T | Promise<T> {
+  return creates ? inTransaction(core.db, async (db) => run({ ...core, db })) : run(core);
+}
+
+/** The call and its kept answer stand or fall together, so a repeated call finds either both or neither. */
+function runKeyed(
+  core: Core,
+  call: KeyedCall,
+  status: number,
+  run: (core: Core) => unknown,
+): Promise<{ status: number; answer: unknown }> {
+  return inTransaction(core.db, async (db) => {
+    const inner = { ...core, db };
+    const kept: KeptAnswer | null = await findKeptAnswer(inner, call);
+    if (kept) return { status: kept.status, answer: kept.body };
+    const answer = await run(inner);
+    await keepAnswer(inner, call, { status, body: answer });
+    return { status, answer };
+  });
+}
+
+function keyedCall(req: Request, { personId }: Actor, body: unknown): KeyedCall | null {
+  const key = req.get('idempotency-key');
+  if (key === undefined) return null;
+  if (!/^[\x21-\x7e]{1,200}$/.test(key)) {
+    throw invalidField('header.Idempotency-Key', 'Must be 1 to 200 visible characters of ASCII');
+  }
+  return { personId, key, request: JSON.stringify([req.method, req.path, body]) };
+}

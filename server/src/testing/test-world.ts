@@ -1,0 +1,96 @@
+import { insertPerson } from '../account/people-repository.ts';
+import { type Role, roles } from '../contract/roles.ts';
+import { newId, newSecret, hashSecret } from '../db/secret-tokens.ts';
+import { insertWorkspace } from '../workspaces/workspace-repository.ts';
+import type { TestServer } from './test-server.ts';
+
+const DAY_MS = 24 * 3_600_000;
+
+/** A workspace with a member of each role and two more owners' things to act on, an outsider, and a removed member. */
+export type TestWorld = {
+  workspaceId: string;
+  name: string;
+  people: Record<Role | 'bystander' | 'outsider' | 'removed', string>;
+  outsiderWorkspaceId: string;
+  /** An open invitation to somebody, and its token. */
+  invitation: { id: string; token: string; email: string };
+  /** An API token that the bystander made, of role viewer. */
+  apiToken: { id: string; secret: string };
+};
+
+let serial = 0;
+
+/** Fills a database in one transaction, without HTTP. */
+export function makeWorld({ core }: TestServer): Promise<TestWorld> {
+  return core.db.transaction().execute(async (db) => {
+    const inner = { ...core, db };
+    serial += 1;
+    const number = serial;
+    const make = (name: string) =>
+      insertPerson(inner, { email: `${name}-${number}@puna.example`, name, passwordHash: null, isEmailProven: true });
+    const [owner, engineer, analyst, viewer] = [
+      await make('owner'),
+      await make('engineer'),
+      await make('analyst'),
+      await make('viewer'),
+    ];
+    const people = {
+      owner,
+      engineer,
+      analyst,
+      viewer,
+      bystander: await make('bystander'),
+      outsider: await make('outsider'),
+      removed: await make('removed'),
+    };
+    const { id: workspaceId, name } = await insertWorkspace(inner, owner, 'Puna Mobility');
+    const { id: outsiderWorkspaceId } = await insertWorkspace(inner, people.outsider, 'Salar');
+    const joinedAt = core.now();
+    for (const role of roles.filter((one) => one !== 'owner')) {
+      await db.insertInto('members').values({ workspaceId, personId: people[role], role, joinedAt }).execute();
+    }
+    await db
+      .insertInto('members')
+      .values({ workspaceId, personId: people.bystander, role: 'viewer', joinedAt })
+      .execute();
+    const world = { workspaceId, name, people, outsiderWorkspaceId };
+    const invitation = { id: newId(), token: newSecret(), email: `invited-${number}@puna.example` };
+    await db
+      .insertInto('invitations')
+      .values({
+        id: invitation.id,
+        workspaceId,
+        email: invitation.email,
+        role: 'engineer',
+        tokenHash: hashSecret(invitation.token),
+        invitedBy: owner,
+        createdAt: joinedAt,
+        expiresAt: joinedAt + 7 * DAY_MS,
+        acceptedAt: null,
+        withdrawnAt: null,
+      })
+      .execute();
+    const apiToken = await insertToken(inner, { workspaceId, personId: people.bystander, role: 'viewer' });
+    return { ...world, invitation, apiToken };
+  });
+}
+
+/** An API token straight into the database. */
+export async function insertToken(
+  { db, now }: TestServer['core'],
+  {
+    workspaceId,
+    personId,
+    role,
+    expiresAt = now() + DAY_MS,
+  }: { workspaceId: string; personId: string; role: Role; expiresAt?: number },
+): Promise<{ id: string; secret: string }> {
+  const [id, secret] = [newId(), newSecret()];
+  const tokenHash = hashSecret(secret);
+  const values = { id, workspaceId, personId, name: 'script', role, tokenHash, createdAt: now(), expiresAt };
+  await db
+    .insertInto('apiTokens')
+    .values({ ...values, lastUsedAt: null, revokedAt: null })
+    .execute();
+  return { id, secret };
+}
