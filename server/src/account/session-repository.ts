@@ -55,6 +55,12 @@ export function rotateSession(core: Core, refreshToken: string): Promise<Rotatio
       .set({ spentAt: at })
       .where('tokenHash', '=', hashSecret(refreshToken))
       .execute();
+    // A token spent so long ago is remembered no more: whoever brings it is a stranger, not a thief of this session.
+    await db
+      .deleteFrom('refreshTokens')
+      .where('sessionId', '=', sessionId)
+      .where('spentAt', '<', at - SESSION_LIFE_MS)
+      .execute();
     const lives = { lastUsedAt: at, expiresAt: at + SESSION_LIFE_MS };
     await db.updateTable('sessions').set(lives).where('id', '=', sessionId).execute();
     return { personId, sessionId, refreshToken: await issueRefreshToken({ ...core, db }, sessionId) };

@@ -151,6 +151,23 @@ describe('refresh', () => {
     expect((await browser.call(account.refresh)).body).toMatchObject({ status: 401, code: 'SESSION_ENDED' });
   });
 
+  it('remembers spent tokens for 30 days and no longer', async () => {
+    const { answer, browser } = await newPerson();
+    const spentTokens = async () => {
+      const rows = server.core.db.selectFrom('refreshTokens').innerJoin('sessions', 'sessions.id', 'sessionId');
+      const own = rows.where('personId', '=', String(answer.body.person.id)).where('spentAt', 'is not', null);
+      return (await own.select('tokenHash').execute()).length;
+    };
+    await browser.call(account.refresh);
+    server.clock.now += 29 * DAY_MS;
+    await browser.call(account.refresh);
+    expect(await spentTokens()).toBe(2);
+    server.clock.now += 2 * DAY_MS;
+    await browser.call(account.refresh);
+    expect(await spentTokens()).toBe(2);
+    expect((await browser.call(account.readMe)).status).toBe(200);
+  });
+
   it('refuses who has no token, and one it never gave', async () => {
     const browser = server.browser();
     expect((await browser.call(account.refresh)).body).toMatchObject({ status: 401, code: 'NOT_SIGNED_IN' });

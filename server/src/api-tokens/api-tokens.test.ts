@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { apiTokenEndpoints as apiTokens } from '../contract/api-token.ts';
+import { type ApiToken, apiTokenEndpoints as apiTokens } from '../contract/api-token.ts';
 import { workspaceEndpoints as workspaces } from '../contract/workspace.ts';
 import { startTestServer, type TestServer } from '../testing/test-server.ts';
 import { makeWorld, type TestWorld } from '../testing/test-world.ts';
@@ -76,6 +76,21 @@ describe('an API token', () => {
     expect((await server.browser().call(workspaces.readWorkspace, { params, headers: late.headers })).status).toBe(200);
     server.clock.now += 1;
     expect((await server.browser().call(workspaces.readWorkspace, { params, headers: late.headers })).status).toBe(401);
+  });
+
+  it('of another workspace is neither seen nor revoked by an owner', async () => {
+    const [one, two] = [await makeWorld(server), await makeWorld(server)];
+    const owner = await server.browserOf(one.people.owner);
+    const params = { workspaceId: one.workspaceId };
+    const { items } = (await owner.call(apiTokens.listApiTokens, { params })).body as { items: ApiToken[] };
+    expect(items.map(({ id }) => id)).toEqual([one.apiToken.id]);
+    const foreign = { ...params, tokenId: two.apiToken.id };
+    expect((await owner.call(apiTokens.revokeApiToken, { params: foreign })).status).toBe(404);
+    const headers = { Authorization: `Bearer ${two.apiToken.secret}` };
+    const read = await server
+      .browser()
+      .call(workspaces.readWorkspace, { params: { workspaceId: two.workspaceId }, headers });
+    expect(read.status).toBe(200);
   });
 
   it('needs no CSRF token, and is not helped by cookies beside it', async () => {

@@ -18,6 +18,7 @@ export function htmlPage(title: string, body: string): string {
   return `<!doctype html>
 <html lang="en">
 <head><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1">
+<link rel="icon" href="/mark.svg" type="image/svg+xml">
 <title>${escapeHtml(title)} · Voltiplano</title><style>${STYLE}</style></head>
 <body><main><h1>${escapeHtml(title)}</h1>
 ${body}

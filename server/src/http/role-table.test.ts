@@ -6,7 +6,10 @@ import type { TestBrowser } from '../testing/test-browser.ts';
 import { startTestServer, type TestServer } from '../testing/test-server.ts';
 import { insertToken, makeWorld, type TestWorld } from '../testing/test-world.ts';
 
-/** Who tries. Those with "token" are scripts with an API token of that role, made by a member of at least that role. */
+/**
+ * Who tries. Those with "token" are scripts with an API token of that role; the other token is one of another workspace,
+ * made by somebody who owns both.
+ */
 const actors = [
   'signed out',
   'expired',
@@ -18,7 +21,7 @@ const actors = [
   'removed',
   'viewer token',
   'owner token',
-  'outsider token',
+  'other token',
   'expired token',
 ] as const;
 type Actor = (typeof actors)[number];
@@ -158,13 +161,20 @@ async function actAs(
       return token(people.owner, 'viewer');
     case 'owner token':
       return token(people.owner, 'owner');
-    case 'outsider token':
-      return token(people.outsider, 'owner', outsiderWorkspaceId);
+    case 'other token':
+      return token(await ownerOfBoth(world), 'owner', outsiderWorkspaceId);
     case 'expired token':
       return token(people.owner, 'owner', workspaceId, server.clock.now - 1);
     default:
       return { browser: await server.browserOf(people[actor]) };
   }
+}
+
+/** The owner, who belongs to another workspace too. */
+async function ownerOfBoth({ people, outsiderWorkspaceId: workspaceId }: TestWorld): Promise<string> {
+  const values = { workspaceId, personId: people.owner, role: 'owner', joinedAt: server.clock.now } as const;
+  await server.core.db.insertInto('members').values(values).execute();
+  return people.owner;
 }
 
 async function expiredBrowser(personId: string): Promise<TestBrowser> {
