@@ -27,7 +27,15 @@ export default defineConfig({
           testTimeout: 120_000,
         },
       },
-      { test: { name: 'server', environment: 'node', include: ['server/src/**/*.test.ts'], setupFiles } },
+      {
+        test: {
+          name: 'server',
+          environment: 'node',
+          include: ['server/src/**/*.test.ts'],
+          setupFiles,
+          testTimeout: 20_000,
+        },
+      },
       {
         // Without a DOM: setting one up takes longer than most of these tests.
         test: {

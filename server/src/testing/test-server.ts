@@ -21,7 +21,7 @@ import { loadSecrets } from '../secrets/secrets.ts';
 import { TestBrowser } from './test-browser.ts';
 
 const MANY = 100_000;
-const MAIL_PATIENCE_MS = 5000;
+const MAIL_PATIENCE_MS = 10_000;
 
 export type TestServer = {
   address: string;
