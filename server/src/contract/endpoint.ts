@@ -29,6 +29,8 @@ export type Endpoint = {
   problems: readonly ProblemCode[];
   /** Takes an `Idempotency-Key`: the call repeated with the same key creates nothing more and gets the same answer. */
   creates?: true;
+  /** Needs an `If-Match` with the ETag that the change was made from. */
+  ifMatch?: true;
   /** Counted per address against the tries that the server allows. */
   limited?: 'sign-in' | 'sign-up' | 'mail';
 };

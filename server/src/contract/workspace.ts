@@ -238,7 +238,13 @@ export const workspaceEndpoints = {
     summary: 'Who did what, newest first',
     access: 'read',
     params: inWorkspace,
-    query: pageQuerySchema,
+    query: pageQuerySchema.extend({
+      subjectId: z
+        .string()
+        .max(40)
+        .optional()
+        .meta({ description: 'Only what was done to this study, part or person' }),
+    }),
     status: 200,
     answer: pageOf(activitySchema),
     problems: [],
