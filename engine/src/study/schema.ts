@@ -229,13 +229,18 @@ const leg = z
     context.addIssue({ code: 'custom', path: ['depart'], message, params: { rule: 'depart-needs-station' } });
   });
 
+const legs = z.array(leg).min(1).max(500);
+
+/** The legs of a trip with their stations, apart from the trip. */
+const route = z.strictObject({ legs });
+
 const trip = z
   .strictObject({
     ambientC: quantity('trip.ambientC').optional(),
     startSoc: quantity('trip.startSoc'),
     startTempC: quantity('trip.startTempC'),
     reserveSoc: quantity('trip.reserveSoc').default(0.1),
-    legs: z.array(leg).min(1).max(500),
+    legs,
     stopOverheadMin: quantity('trip.stopOverheadMin').default(5),
     precondition: z
       .strictObject({ targetC: quantity('trip.precondition.targetC'), leadMin: quantity('trip.precondition.leadMin') })
@@ -324,7 +329,20 @@ export const tripStudySchema = z
 /** A study file of any kind the engine runs. */
 export const studySchema = z.discriminatedUnion('kind', [sessionStudySchema, tripStudySchema]);
 
-export const partSchemas = { cell, pack, thermal, inlet, station, boost, strategy, session, vehicle, trip } as const;
+/** The parts of a study by name, and a route, which is a part of a trip. */
+export const partSchemas = {
+  cell,
+  pack,
+  thermal,
+  inlet,
+  station,
+  boost,
+  strategy,
+  session,
+  vehicle,
+  route,
+  trip,
+} as const;
 
 export type SessionStudy = z.output<typeof sessionStudySchema>;
 export type SessionStudyInput = z.input<typeof sessionStudySchema>;
