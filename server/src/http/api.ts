@@ -6,6 +6,7 @@ import { inTransaction } from '../db/database.ts';
 import { WorkspaceAccess } from '../workspaces/workspace-access.ts';
 import type { Actor, SessionActor } from './actor.ts';
 import { authenticate } from './authenticate.ts';
+import { readIfMatch } from './if-match.ts';
 import { findKeptAnswer, keepAnswer, type KeptAnswer, type KeyedCall } from './kept-answers.ts';
 import { HttpProblem, invalidField, invalidInput } from './problem.ts';
 import { type RateLimits, rateLimiters } from './rate-limits.ts';
@@ -29,6 +30,8 @@ export type Call<E extends Endpoint> = {
   params: ParamsOf<E>;
   query: QueryOf<E>;
   body: BodyOf<E>;
+  /** The entity tag that the change was made from, as it was sent; see `requireMatch`. */
+  ifMatch: E extends { ifMatch: true } ? string : undefined;
   actor: ActorOf<E>;
   /** Access to the workspace in the path, with the capability that the endpoint names. */
   access: AccessOf<E>;
@@ -53,6 +56,11 @@ export class Api {
     this.deps = deps;
     this.limiters = rateLimiters(deps.rateLimits);
     this.router.use(express.json({ limit: BODY_LIMIT }));
+    // What these calls answer is never kept, so there is nothing that a 304 could spare.
+    this.router.use((req, _res, next) => {
+      delete req.headers['if-none-match'];
+      next();
+    });
   }
 
   serve<E extends Endpoint>(endpoint: E, handler: Handler<E>): void {
@@ -68,10 +76,12 @@ export class Api {
     const actor = await this.admit(endpoint, req);
     const params = parseParams(endpoint, req);
     const access = actor ? await openAccess(core, endpoint, actor, params) : null;
+    const ifMatch = endpoint.ifMatch ? readIfMatch(req) : undefined;
     const query = parse('query', endpoint.query, req.query);
     const body = parse('body', endpoint.body, req.body ?? {});
-    const run = (inner: Core) => handler({ params, query, body, actor, access, core: inner, req, res } as Call<E>);
-    const call = actor && endpoint.creates ? keyedCall(req, actor, body) : null;
+    const judged = { params, query, body, ifMatch, actor, access, req, res };
+    const run = (inner: Core) => handler({ ...judged, core: inner } as Call<E>);
+    const call = actor && endpoint.creates ? keyedCall(req, actor, [body, ifMatch]) : null;
     const { status, answer } = call
       ? await runKeyed(core, call, endpoint.status, run)
       : { status: endpoint.status, answer: await runPlain(core, endpoint, run) };
@@ -139,11 +149,11 @@ function runKeyed(
   });
 }
 
-function keyedCall(req: Request, { personId }: Actor, body: unknown): KeyedCall | null {
+function keyedCall(req: Request, { personId }: Actor, [body, ifMatch]: [unknown, string?]): KeyedCall | null {
   const key = req.get('idempotency-key');
   if (key === undefined) return null;
   if (!/^[\x21-\x7e]{1,200}$/.test(key)) {
     throw invalidField('header.Idempotency-Key', 'Must be 1 to 200 visible characters of ASCII');
   }
-  return { personId, key, request: JSON.stringify([req.method, req.path, body]) };
+  return { personId, key, request: JSON.stringify([req.method, req.path, body, ...(ifMatch ? [ifMatch] : [])]) };
 }

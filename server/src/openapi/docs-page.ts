@@ -52,8 +52,9 @@ function whoMay(security: oas31.SecurityRequirementObject[] = []): string {
   return security.some((one) => 'apiToken' in one) ? 'By session or API token.' : 'By session only.';
 }
 
-function parameterRow({ name, in: place, required, schema }: oas31.ParameterObject): string {
-  return row(`${place} <code>${escapeHtml(name)}</code>`, `${typeOf(schema)}${required ? '' : ', optional'}`);
+function parameterRow({ name, in: place, required, schema, description }: oas31.ParameterObject): string {
+  const type = `${typeOf(schema)}${required ? '' : ', optional'}`;
+  return row(`${place} <code>${escapeHtml(name)}</code>`, [type, prose(description)].filter(Boolean).join('<br>'));
 }
 
 function responseRow(status: string, response: oas31.ResponseObject): string {

@@ -22,7 +22,8 @@ export function openApiDocument(version: string): oas31.OpenAPIObject {
 
 const DESCRIPTION = `Every error is application/problem+json with a stable \`code\`. Calls by cookie that change something repeat the
 voltiplano_csrf cookie in the X-CSRF-Token header. Calls that create something take an Idempotency-Key: repeated within a
-day under the same key, they create nothing more and get the same answer.`;
+day under the same key, they create nothing more and get the same answer. Calls that change something with versions name
+in If-Match the ETag of the version that the change was made from, and are refused where a newer one is there.`;
 
 /** Problems that an endpoint can answer: its own, and those that every call of its kind shares. */
 export function problemsOf({
@@ -32,6 +33,7 @@ export function problemsOf({
   query,
   body,
   creates,
+  ifMatch,
   limited,
   problems,
 }: Endpoint): ProblemCode[] {
@@ -47,8 +49,10 @@ export function problemsOf({
     method !== 'get' && access !== 'anyone' && 'CSRF_REFUSED',
     body && 'BAD_REQUEST',
     body && 'BODY_TOO_LARGE',
-    (query ?? body ?? creates) && 'INVALID_INPUT',
+    (query ?? body ?? creates ?? ifMatch) && 'INVALID_INPUT',
     creates && 'IDEMPOTENCY_MISMATCH',
+    ifMatch && 'IF_MATCH_MISSING',
+    ifMatch && 'EDIT_CONFLICT',
     limited && 'TOO_MANY_REQUESTS',
     'INTERNAL',
   ];
@@ -70,7 +74,7 @@ export function templateOf(path: string): string {
 }
 
 function operationOf(endpoint: Endpoint): ZodOpenApiOperationObject {
-  const { id, tag, summary, access, params, query, body, status, answer, creates } = endpoint;
+  const { id, tag, summary, access, params, query, body, status, answer, creates, ifMatch } = endpoint;
   const security: oas31.SecurityRequirementObject[] = [{ session: [] }];
   if (access !== 'session') security.push({ apiToken: [] });
   return {
@@ -80,7 +84,7 @@ function operationOf(endpoint: Endpoint): ZodOpenApiOperationObject {
     description: access === 'anyone' || access === 'session' ? undefined : `Needs the capability \`${access}\`.`,
     security: access === 'anyone' ? [] : security,
     requestParams: { ...(params && { path: params }), ...(query && { query }) },
-    parameters: creates ? [IDEMPOTENCY_KEY] : undefined,
+    parameters: [...(ifMatch ? [IF_MATCH] : []), ...(creates ? [IDEMPOTENCY_KEY] : [])],
     requestBody: body ? { content: { 'application/json': { schema: body } }, required: true } : undefined,
     responses: {
       [status]: {
@@ -97,6 +101,14 @@ const IDEMPOTENCY_KEY: oas31.ParameterObject = {
   in: 'header',
   required: false,
   schema: { type: 'string', minLength: 1, maxLength: 200 },
+};
+
+const IF_MATCH: oas31.ParameterObject = {
+  name: 'If-Match',
+  in: 'header',
+  required: true,
+  description: 'The one ETag that the change was made from, such as `"r3"`; compared strongly, `*` is refused',
+  schema: { type: 'string' },
 };
 
 function problemResponses(codes: readonly ProblemCode[]) {
