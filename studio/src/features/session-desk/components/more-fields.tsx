@@ -1,5 +1,5 @@
 import { useId, type ReactNode } from 'react';
-import { isWithin } from '../model/study-path.ts';
+import { isWithin } from '../../../lib/study-path.ts';
 import { changesOf, issuesOf } from '../model/derived.ts';
 import type { FieldSpec } from '../model/input-sections.ts';
 import { useDesk, useDispatch } from '../hooks/use-desk.ts';

@@ -1,7 +1,7 @@
 import { TextField } from '../../../components/fields/text-field.tsx';
 import { useDesk, useDispatch } from '../hooks/use-desk.ts';
 import { isMoved } from '../model/changes.ts';
-import { valueAt } from '../model/study-path.ts';
+import { valueAt } from '../../../lib/study-path.ts';
 
 type Props = { path: string; label: string };
 

@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react';
 import { useDesk, useDispatch } from '../hooks/use-desk.ts';
 import { newParts } from '../model/input-sections.ts';
-import { valueAt } from '../model/study-path.ts';
+import { valueAt } from '../../../lib/study-path.ts';
 import type { Part } from '../model/draft.ts';
 
 type Props = {

@@ -1,7 +1,7 @@
 import { ChoiceField } from '../../../components/fields/choice-field.tsx';
 import { useDesk, useDispatch } from '../hooks/use-desk.ts';
 import { isMoved } from '../model/changes.ts';
-import { potentialFrom, potentialSources, sourceOf } from '../model/potential-sources.ts';
+import { potentialFrom, potentialSources, sourceOf } from '../../../lib/potential-sources.ts';
 import { StudyTable } from './study-table.tsx';
 import { TableChart } from './table-chart.tsx';
 

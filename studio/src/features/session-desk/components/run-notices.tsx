@@ -2,7 +2,7 @@ import { Notice } from '../../../components/notice.tsx';
 import { useDesk } from '../hooks/use-desk.ts';
 import { useRun, useRuns } from '../hooks/run-context.ts';
 import { issuesOf } from '../model/derived.ts';
-import { labelOfPath } from '../model/issue-text.ts';
+import { labelOfPath } from '../../../lib/issue-text.ts';
 
 /** Above the results: why the present study has none. */
 export function RunFailureNotice() {

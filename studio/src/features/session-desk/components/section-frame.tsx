@@ -3,7 +3,7 @@ import { Section } from '../../../components/section.tsx';
 import { useDesk, useDispatch } from '../hooks/use-desk.ts';
 import { changesOf, issuesOf } from '../model/derived.ts';
 import { sections, sectionSummary, type SectionName } from '../model/input-sections.ts';
-import { isWithin } from '../model/study-path.ts';
+import { isWithin } from '../../../lib/study-path.ts';
 
 type Props = { name: SectionName; children: ReactNode };
 

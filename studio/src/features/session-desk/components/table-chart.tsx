@@ -4,7 +4,7 @@ import { toShown } from '../../../components/fields/measure.ts';
 import { useUnits } from '../../../lib/units.ts';
 import { useDesk } from '../hooks/use-desk.ts';
 import { tableCurve, type Reading } from '../model/table-curve.ts';
-import { tableAt } from '../model/table-specs.ts';
+import { tableAt } from '../../../lib/table-specs.ts';
 
 type Props = { path: string; grid: Grid };
 

@@ -6,7 +6,7 @@ import { useDesk, useDeskStore, useDispatch } from '../hooks/use-desk.ts';
 import { useRun } from '../hooks/run-context.ts';
 import { ledgeMinutes } from '../model/ledge-minutes.ts';
 import { taperInShape, taperShapes, type TaperUnit } from '../model/taper-shapes.ts';
-import { taperTable } from '../model/table-specs.ts';
+import { taperTable } from '../../../lib/table-specs.ts';
 import { HeldNote } from './held-note.tsx';
 import { NameField } from './name-field.tsx';
 import { SectionFrame } from './section-frame.tsx';

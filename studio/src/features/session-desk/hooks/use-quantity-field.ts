@@ -14,8 +14,8 @@ import { useUnits, type TemperatureUnit } from '../../../lib/units.ts';
 import { isMoved } from '../model/changes.ts';
 import { filledOf, issuesOf } from '../model/derived.ts';
 import { entryAt } from '../model/draft.ts';
-import { issueSentence, labelOfPath } from '../model/issue-text.ts';
-import { valueAt } from '../model/study-path.ts';
+import { issueSentence, labelOfPath } from '../../../lib/issue-text.ts';
+import { valueAt } from '../../../lib/study-path.ts';
 import { useDesk, useDispatch } from './use-desk.ts';
 
 /** Everything the field of one quantity shows, and what it does with what is typed. */

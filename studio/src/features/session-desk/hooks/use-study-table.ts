@@ -4,9 +4,9 @@ import type { GridEdit } from '../../../components/fields/table-edits.ts';
 import type { CellIssue } from '../../../components/fields/table-issues.tsx';
 import type { TemperatureUnit } from '../../../lib/units.ts';
 import { issuesOf } from '../model/derived.ts';
-import { issueSentence } from '../model/issue-text.ts';
-import { isWithin, valueAt } from '../model/study-path.ts';
-import { cellMeasure, cellOfPath, tableAt, type TableSpec } from '../model/table-specs.ts';
+import { issueSentence } from '../../../lib/issue-text.ts';
+import { isWithin, valueAt } from '../../../lib/study-path.ts';
+import { cellMeasure, cellOfPath, tableAt, type TableSpec } from '../../../lib/table-specs.ts';
 import { useDesk, useDispatch } from './use-desk.ts';
 
 type Taper = SessionStudyInput['strategy']['taper'];

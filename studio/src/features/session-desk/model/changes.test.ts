@@ -1,7 +1,7 @@
 import { expect, test } from 'vitest';
 import { changedPaths, isMoved } from './changes.ts';
 import { sampleStudy } from './sample-study.ts';
-import { withValueAt } from './study-path.ts';
+import { withValueAt } from '../../../lib/study-path.ts';
 
 test('changedPaths counts a field, a table and a part once each', () => {
   let study = withValueAt(sampleStudy, 'station.currentMaxA', 350);

@@ -1,5 +1,5 @@
 import type { SessionStudyInput } from '@voltiplano/engine';
-import { valueAt } from './study-path.ts';
+import { valueAt } from '../../../lib/study-path.ts';
 
 /**
  * Paths of every field in which two studies differ; a table, a part or a name counts once.

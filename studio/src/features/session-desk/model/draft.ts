@@ -1,8 +1,8 @@
 import type { SessionStudyInput, StudyIssue } from '@voltiplano/engine';
 import { studyIssues } from './checked-study.ts';
-import { isWithin, valueAt, withValueAt } from './study-path.ts';
+import { isWithin, valueAt, withValueAt } from '../../../lib/study-path.ts';
 import type { Cell, Grid } from '../../../components/fields/grid.ts';
-import { tableAt } from './table-specs.ts';
+import { tableAt } from '../../../lib/table-specs.ts';
 
 /** What a person entered that does not stand in the study yet: one field, or a whole table. */
 export type Entry = Cell | Grid;

@@ -1,6 +1,6 @@
 import { quantities, type StudyIssue } from '@voltiplano/engine';
-import { numberText, quantityPathOf, shownUnit, toShown, type Measure } from '../../../components/fields/measure.ts';
-import type { TemperatureUnit } from '../../../lib/units.ts';
+import { numberText, quantityPathOf, shownUnit, toShown, type Measure } from '../components/fields/measure.ts';
+import type { TemperatureUnit } from './units.ts';
 
 /** What a field is called: the label of its quantity, or its path where it has none. */
 export function labelOfPath(path: string): string {

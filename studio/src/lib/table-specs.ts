@@ -1,6 +1,6 @@
 import type { QuantityPath } from '@voltiplano/engine';
-import type { Cell, Grid } from '../../../components/fields/grid.ts';
-import { measureOf, type Measure } from '../../../components/fields/measure.ts';
+import type { Cell, Grid } from '../components/fields/grid.ts';
+import { measureOf, type Measure } from '../components/fields/measure.ts';
 
 export type Column = {
   label: string;
