@@ -31,6 +31,8 @@ export type Endpoint = {
   creates?: true;
   /** Needs an `If-Match` with the ETag that the change was made from. */
   ifMatch?: true;
+  /** Largest body, where that is more than the 1 MB that every call may send. */
+  bodyLimit?: '10mb';
   /** Counted per address against the tries that the server allows. */
   limited?: 'sign-in' | 'sign-up' | 'mail';
 };

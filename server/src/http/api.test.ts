@@ -102,6 +102,15 @@ describe('a body', () => {
     expect(await response.text()).not.toContain('hush');
   });
 
+  it('is not even read from somebody who may not call', async () => {
+    const response = await fetch(`${server.address}/api/v1/workspaces`, {
+      method: 'POST',
+      headers: { 'Content-Type': 'application/json', Origin: server.address },
+      body: '{"name": "hush',
+    });
+    expect(response.status).toBe(401);
+  });
+
   it('of another type counts as none', async () => {
     const headers = { 'Content-Type': 'text/plain' };
     const answer = await server

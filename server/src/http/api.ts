@@ -1,4 +1,4 @@
-import express, { type Request, type Response, Router } from 'express';
+import express, { type Request, type RequestHandler, type Response, Router } from 'express';
 import type { z } from 'zod';
 import type { AnswerOf, BodyOf, Endpoint, ParamsOf, QueryOf } from '../contract/endpoint.ts';
 import type { Core } from '../core.ts';
@@ -55,7 +55,6 @@ export class Api {
   constructor(deps: ApiDeps) {
     this.deps = deps;
     this.limiters = rateLimiters(deps.rateLimits);
-    this.router.use(express.json({ limit: BODY_LIMIT }));
     // What these calls answer is never kept, so there is nothing that a 304 could spare.
     this.router.use((req, _res, next) => {
       delete req.headers['if-none-match'];
@@ -64,13 +63,21 @@ export class Api {
   }
 
   serve<E extends Endpoint>(endpoint: E, handler: Handler<E>): void {
-    const limiters = endpoint.limited ? this.limiters[endpoint.limited] : [];
+    const takeBody = express.json({ limit: endpoint.bodyLimit ?? BODY_LIMIT });
+    // Tries are counted by the e-mail in the body too; else a body is taken only from who may send it.
+    const limiters = endpoint.limited ? [takeBody, ...this.limiters[endpoint.limited]] : [];
     this.router[endpoint.method](endpoint.path, ...limiters, async (req, res) => {
-      await this.answer(endpoint, handler, req, res);
+      await this.answer(endpoint, handler, takeBody, req, res);
     });
   }
 
-  private async answer<E extends Endpoint>(endpoint: E, handler: Handler<E>, req: Request, res: Response) {
+  private async answer<E extends Endpoint>(
+    endpoint: E,
+    handler: Handler<E>,
+    takeBody: RequestHandler,
+    req: Request,
+    res: Response,
+  ) {
     const { core } = this.deps;
     res.set('Cache-Control', 'no-store');
     const actor = await this.admit(endpoint, req);
@@ -78,6 +85,7 @@ export class Api {
     const access = actor ? await openAccess(core, endpoint, actor, params) : null;
     const ifMatch = endpoint.ifMatch ? readIfMatch(req) : undefined;
     const query = parse('query', endpoint.query, req.query);
+    await finished(takeBody, req, res);
     const body = parse('body', endpoint.body, req.body ?? {});
     const judged = { params, query, body, ifMatch, actor, access, req, res };
     const run = (inner: Core) => handler({ ...judged, core: inner } as Call<E>);
@@ -103,6 +111,16 @@ export class Api {
     }
     return actor;
   }
+}
+
+/** Runs a middleware to its end; one that has run already changes nothing. */
+function finished(middleware: RequestHandler, req: Request, res: Response): Promise<void> {
+  return new Promise((resolve, reject) => {
+    void middleware(req, res, (error?: unknown) => {
+      if (error instanceof Error) reject(error);
+      else resolve();
+    });
+  });
 }
 
 async function openAccess(core: Core, { access }: Endpoint, actor: Actor, params: unknown) {
