@@ -190,6 +190,18 @@ const FIXED: TableSpec[] = [
   overZ('cell.resistanceShape', 'Resistance over z', { label: 'Factor', measure: plain('×', 2, 0.05) }),
   columnsTable(
     {
+      path: 'vehicle.cabinWPerAmbient',
+      title: 'Cabin over ambient',
+      columns: [
+        quantityColumn('Ambient', 'vehicle.cabinWPerAmbient.tempC[]'),
+        quantityColumn('Cabin', 'vehicle.cabinWPerAmbient.watts[]'),
+      ],
+      row: 'row',
+    },
+    ['tempC', 'watts'],
+  ),
+  columnsTable(
+    {
       path: 'strategy.coldLimit',
       title: 'Cold limit',
       columns: [
