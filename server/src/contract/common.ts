@@ -16,7 +16,7 @@ export const passwordSchema = z.string().min(10, 'At least 10 characters').max(2
 export const oneTimeTokenSchema = z.string().min(1).max(100);
 
 export const pageQuerySchema = z.object({
-  cursor: z.string().max(200).optional().meta({ description: '`nextCursor` of the page before' }),
+  cursor: z.string().max(4000).optional().meta({ description: '`nextCursor` of the page before' }),
   limit: z.coerce.number().int().min(1).max(200).default(50),
 });
 export type PageQuery = z.infer<typeof pageQuerySchema>;

@@ -67,9 +67,11 @@ describe('migrations', () => {
 
   it('make strict tables only', async () => {
     await migrateToLatest(db);
-    for (const { type, name, sql: text } of await schemaOf(db)) {
-      if (type === 'table') expect(text, name).toMatch(/\) STRICT(, WITHOUT ROWID)?$/);
-    }
+    // Full-text tables and what they keep their words in (virtual, shadow) cannot be strict.
+    const { rows } = await sql<{ name: string; strict: 0 | 1 }>`SELECT name, strict FROM pragma_table_list
+      WHERE schema = 'main' AND type = 'table' AND name NOT LIKE 'kysely%' AND name NOT LIKE 'sqlite%'`.execute(db);
+    expect(rows.length).toBeGreaterThan(10);
+    for (const { name, strict } of rows) expect(strict, name).toBe(1);
   });
 });
 

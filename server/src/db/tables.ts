@@ -1,4 +1,5 @@
 import type { ColumnType, Generated } from 'kysely';
+import type { LibraryKind } from '../contract/library.ts';
 import type { Role } from '../contract/roles.ts';
 
 /** Moment [ms since 1970-01-01T00:00Z]. */
@@ -105,6 +106,7 @@ type KeptAnswersTable = {
   requestHash: Fixed<string>;
   status: Fixed<number>;
   sealedBody: Fixed<Buffer>;
+  etag: Fixed<string | null>;
   createdAt: Fixed<Moment>;
 };
 
@@ -117,6 +119,39 @@ type OutboxTable = {
   tries: number;
   nextTryAt: Moment;
 };
+
+type LibraryItemsTable = {
+  /** The row in `librarySearch`. */
+  seq: Generated<number>;
+  id: Fixed<string>;
+  workspaceId: Fixed<string>;
+  kind: Fixed<LibraryKind>;
+  name: string;
+  /** `sortText` of the name. */
+  sortName: string;
+  /** The newest. */
+  revision: number;
+  changedAt: Moment;
+  changedBy: string | null;
+  archivedAt: Moment | null;
+};
+
+/** Kept by triggers: numbered without a gap, never changed. */
+type LibraryRevisionsTable = {
+  itemId: Fixed<string>;
+  revision: Fixed<number>;
+  name: Fixed<string>;
+  notes: Fixed<string>;
+  source: Fixed<string>;
+  /** JSON object, as it was sent. */
+  body: Fixed<string>;
+  message: Fixed<string>;
+  createdAt: Fixed<Moment>;
+  createdBy: Fixed<string | null>;
+};
+
+/** Words of the newest revision of each item, filled by triggers; searched with MATCH, never read. */
+type LibrarySearchTable = { rowid: Fixed<number> };
 
 /** The schema as the migrations leave it. */
 export type Tables = {
@@ -132,4 +167,7 @@ export type Tables = {
   activity: ActivityTable;
   keptAnswers: KeptAnswersTable;
   outbox: OutboxTable;
+  libraryItems: LibraryItemsTable;
+  libraryRevisions: LibraryRevisionsTable;
+  librarySearch: LibrarySearchTable;
 };

@@ -91,7 +91,7 @@ export class Api {
     const run = (inner: Core) => handler({ ...judged, core: inner } as Call<E>);
     const call = actor && endpoint.creates ? keyedCall(req, actor, [body, ifMatch]) : null;
     const { status, answer } = call
-      ? await runKeyed(core, call, endpoint.status, run)
+      ? await runKeyed(core, call, endpoint.status, res, run)
       : { status: endpoint.status, answer: await runPlain(core, endpoint, run) };
     if (answer === ANSWERED) return;
     if (answer === undefined) res.status(status).end();
@@ -155,14 +155,16 @@ function runKeyed(
   core: Core,
   call: KeyedCall,
   status: number,
+  res: Response,
   run: (core: Core) => unknown,
 ): Promise<{ status: number; answer: unknown }> {
   return inTransaction(core.db, async (db) => {
     const inner = { ...core, db };
     const kept: KeptAnswer | null = await findKeptAnswer(inner, call);
+    if (kept?.etag) res.set('ETag', kept.etag);
     if (kept) return { status: kept.status, answer: kept.body };
     const answer = await run(inner);
-    await keepAnswer(inner, call, { status, body: answer });
+    await keepAnswer(inner, call, { status, body: answer, etag: res.get('ETag') ?? null });
     return { status, answer };
   });
 }

@@ -7,7 +7,7 @@ import { HttpProblem } from './problem.ts';
 /** How long a call may be repeated under its key [ms]. */
 const KEPT_MS = 24 * 3_600_000;
 
-export type KeptAnswer = { status: number; body: unknown };
+export type KeptAnswer = { status: number; body: unknown; etag: string | null };
 
 /** A call under an idempotency key: whose it is, its key, and what it asks for. */
 export type KeyedCall = { personId: string; key: string; request: string };
@@ -31,6 +31,7 @@ export async function findKeptAnswer({ db, secrets, now }: Core, call: KeyedCall
   // The key itself is not stored: only who knows it can read the answer, which may hold a secret shown once.
   return {
     status: kept.status,
+    etag: kept.etag,
     body: JSON.parse(unseal(secrets.sealing, contextOf(call), kept.sealedBody)) as unknown,
   };
 }
@@ -47,6 +48,7 @@ export async function keepAnswer({ db, secrets, now }: Core, call: KeyedCall, an
       keyHash: keyHashOf(call),
       requestHash: hashRequest(call),
       status: answer.status,
+      etag: answer.etag,
       sealedBody: seal(secrets.sealing, contextOf(call), JSON.stringify(answer.body ?? null)),
       createdAt: now(),
     })
