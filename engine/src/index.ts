@@ -1,4 +1,6 @@
-export { parseSessionStudy, parseStudy, parseStudyText, pathText } from './study/parse-study.ts';
+export { parseSessionStudy, parseStudy, parseStudyText } from './study/parse-study.ts';
+export { partIssues } from './study/part-issues.ts';
+export { pathText } from './study/study-issues.ts';
 export { StudyError, type StudyErrorCode, type StudyIssue } from './study/study-error.ts';
 export { quantities, type QuantityPath } from './study/quantities.ts';
 export type { Quantity } from './study/quantity.ts';
