@@ -1,3 +1,5 @@
+import { useReadOnly } from './read-only.ts';
+
 type Props<T extends string> = {
   label: string;
   value: T;
@@ -8,17 +10,22 @@ type Props<T extends string> = {
 
 /** One of a few named kinds. */
 export function ChoiceField<T extends string>({ label, value, options, moved, onChange }: Props<T>) {
+  const readOnly = useReadOnly();
   return (
     <label className="f words">
       <span className="f-label">{label}</span>
       <span className={moved ? 'in moved' : 'in'}>
-        <select value={value} onChange={(event) => onChange(event.target.value as T)}>
-          {options.map((option) => (
-            <option key={option.value} value={option.value}>
-              {option.label}
-            </option>
-          ))}
-        </select>
+        {readOnly ? (
+          <input readOnly value={options.find((option) => option.value === value)?.label ?? value} />
+        ) : (
+          <select value={value} onChange={(event) => onChange(event.target.value as T)}>
+            {options.map((option) => (
+              <option key={option.value} value={option.value}>
+                {option.label}
+              </option>
+            ))}
+          </select>
+        )}
       </span>
     </label>
   );

@@ -4,6 +4,7 @@ import type { Grid } from './grid.ts';
 import { kindAt, LEAST, mapCellName, mapEdits, type MapKinds } from './map-edits.ts';
 import { shownUnit } from './measure.ts';
 import { PasteTable } from './paste-table.tsx';
+import { useReadOnly } from './read-only.ts';
 import { isTableText } from './paste-grid.ts';
 import { TableCell } from './table-cell.tsx';
 import { cellText } from './table-editor.tsx';
@@ -27,6 +28,7 @@ type Props = {
 export function MapEditor(props: Props) {
   const { title, grid, kinds, temperature, issues, onEdit } = props;
   const errorId = useId();
+  const readOnly = useReadOnly();
   const edits = mapEdits(title, kinds, grid, temperature);
   const paste = (event: ClipboardEvent, row: number, column: number) => {
     const text = event.clipboardData.getData('text');
@@ -78,7 +80,7 @@ export function MapEditor(props: Props) {
         meanwhile={props.meanwhile}
         nameOf={(row, column) => mapCellName(kinds, row, column)}
       />
-      <div className="grid-actions">
+      <div className="grid-actions" hidden={readOnly}>
         <Act word="Add a row" onAct={() => onEdit(edits.addRow())} />
         <Act word="Add a column" onAct={() => onEdit(edits.addColumn())} />
         {grid.length > LEAST && <Act word="Delete the last row" onAct={() => onEdit(edits.removeRow())} />}

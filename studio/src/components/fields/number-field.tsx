@@ -2,6 +2,7 @@ import { useId, type KeyboardEvent, type ReactNode } from 'react';
 import { FieldHelp, type FieldHelpText } from './field-help.tsx';
 import { Gauge } from './gauge.tsx';
 import { readNumber, type Measure } from './measure.ts';
+import { useReadOnly } from './read-only.ts';
 import { steppedText } from './step-number.ts';
 import { useTypedText } from './use-typed-text.ts';
 
@@ -31,6 +32,7 @@ type Props = {
 export function NumberField(props: Props) {
   const { label, help, unit, usual, range, was, error, note } = props;
   const id = useId();
+  const readOnly = useReadOnly();
   const { shown, setTyped } = useTypedText(props.text);
   const number = readNumber(shown);
   const change = (text: string) => {
@@ -38,6 +40,7 @@ export function NumberField(props: Props) {
     props.onText(text);
   };
   const step = (event: KeyboardEvent) => {
+    if (readOnly) return;
     const start = props.placeholder ? readNumber(props.placeholder) : usual?.[0];
     const next = steppedText(event, shown, props.measure, range, start);
     if (next === undefined) return;
@@ -57,6 +60,7 @@ export function NumberField(props: Props) {
           autoComplete="off"
           spellCheck={false}
           value={shown}
+          readOnly={readOnly}
           placeholder={props.placeholder}
           aria-invalid={error ? true : undefined}
           aria-describedby={error || note ? id : undefined}

@@ -1,6 +1,7 @@
 import type { ClipboardEvent, KeyboardEvent } from 'react';
 import type { Measure } from './measure.ts';
 import { steppedText } from './step-number.ts';
+import { useReadOnly } from './read-only.ts';
 import { useTypedText } from './use-typed-text.ts';
 
 type Props = {
@@ -22,12 +23,14 @@ const ANY = { min: Number.NEGATIVE_INFINITY, max: Number.POSITIVE_INFINITY };
 
 /** One number in a table; arrows step it as they do in a field. */
 export function TableCell({ label, text, unit, measure, state, errorId, onText, onLeave, onKey, onPaste }: Props) {
+  const readOnly = useReadOnly();
   const { shown, setTyped } = useTypedText(text);
   const change = (next: string) => {
     setTyped(next);
     onText(next);
   };
   const press = (event: KeyboardEvent<HTMLInputElement>) => {
+    if (readOnly) return;
     const next = steppedText(event, shown, measure, ANY);
     if (next === undefined) return onKey?.(event);
     event.preventDefault();
@@ -41,11 +44,12 @@ export function TableCell({ label, text, unit, measure, state, errorId, onText, 
         autoComplete="off"
         spellCheck={false}
         value={shown}
+        readOnly={readOnly}
         aria-invalid={state === 'bad' ? true : undefined}
         aria-describedby={state === 'bad' ? errorId : undefined}
         onChange={(event) => change(event.target.value)}
         onKeyDown={press}
-        onPaste={onPaste}
+        onPaste={readOnly ? undefined : onPaste}
         onBlur={() => {
           setTyped(null);
           onLeave?.();

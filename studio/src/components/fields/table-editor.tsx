@@ -3,6 +3,7 @@ import type { TemperatureUnit } from '../../lib/units.ts';
 import type { Cell, Grid } from './grid.ts';
 import { shownUnit, storedText, type Measure } from './measure.ts';
 import { PasteTable } from './paste-table.tsx';
+import { useReadOnly } from './read-only.ts';
 import { isTableText } from './paste-grid.ts';
 import { TableCell } from './table-cell.tsx';
 import { tableEdits, type GridEdit } from './table-edits.ts';
@@ -39,6 +40,7 @@ type Props = {
 export function TableEditor(props: Props) {
   const { title, columns, grid, temperature, rowWord, minRows, maxRows = Infinity, issues, did, onEdit } = props;
   const errorId = useId();
+  const readOnly = useReadOnly();
   const edits = tableEdits(title, columns, grid, temperature, rowWord);
   const { body, focus } = useCellFocus();
   const remove = (row: number) => {
@@ -95,7 +97,7 @@ export function TableEditor(props: Props) {
               cells={columns.map((column, j) => cellOf(cells[j] ?? null, row, column, j))}
               hasDid={did !== undefined}
               did={did?.cells[row]}
-              onDelete={grid.length > minRows ? () => remove(row) : undefined}
+              onDelete={!readOnly && grid.length > minRows ? () => remove(row) : undefined}
             />
           ))}
         </tbody>
@@ -106,7 +108,7 @@ export function TableEditor(props: Props) {
         meanwhile={props.meanwhile}
         nameOf={(row, j) => capital(`${edits.name(row)}, ${columns[j]?.label.toLowerCase() ?? ''}`)}
       />
-      <div className="grid-actions">
+      <div className="grid-actions" hidden={readOnly}>
         {grid.length < maxRows && (
           <button type="button" className="lnk" onClick={add}>
             {`Add a ${rowWord}`}
