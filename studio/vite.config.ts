@@ -3,10 +3,15 @@ import react from '@vitejs/plugin-react';
 import { defineConfig } from 'vite';
 import { engineDocuments } from './engine-documents.ts';
 
+/** Where `npm run dev` finds the server, which is started beside it. */
+const api = `http://localhost:${process.env.PORT ?? '4380'}`;
+
 export default defineConfig({
   root: import.meta.dirname,
   plugins: [react(), tailwindcss(), engineDocuments()],
   worker: { format: 'es' },
+  // The server compares Origin with the host it is called by, so that name must stay as the browser sent it.
+  server: { proxy: { '/api': { target: api, changeOrigin: false } } },
   build: {
     outDir: 'dist',
     emptyOutDir: true,

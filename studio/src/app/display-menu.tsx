@@ -6,10 +6,19 @@ const daylightWords = { system: 'as the system', day: 'day', night: 'night' } as
 
 /** Day or night, degrees and distances: how this browser shows everything. */
 export function DisplayMenu() {
+  return (
+    <Menu trigger={<button className="lnk">Display</button>} align="end">
+      <DisplayChoices />
+    </Menu>
+  );
+}
+
+/** The same choices, as part of another menu. */
+export function DisplayChoices() {
   const daylight = useDaylight();
   const { system } = useUnits();
   return (
-    <Menu trigger={<button className="lnk">Display</button>} align="end">
+    <>
       <MenuChoice
         heading="Light"
         value={daylight}
@@ -28,6 +37,6 @@ export function DisplayMenu() {
         options={[{ value: 'km' as const }, { value: 'mi' as const }]}
         onChange={(distance) => setUnits({ distance })}
       />
-    </Menu>
+    </>
   );
 }

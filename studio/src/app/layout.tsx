@@ -1,31 +1,31 @@
-import { Link, NavLink, Outlet, ScrollRestoration } from 'react-router-dom';
-import { Mark } from '../components/mark.tsx';
-import { DisplayMenu } from './display-menu.tsx';
+import { lazy, Suspense } from 'react';
+import { Outlet, ScrollRestoration } from 'react-router-dom';
+import { Toasts } from '../components/toasts.tsx';
+import { useSessionEnd } from '../lib/api/session-end.ts';
+import { useMe } from '../lib/session/use-me.ts';
+import { TopBar } from './top-bar.tsx';
 
-/** The head every page stands under. */
+const SessionEndDialog = lazy(async () => ({ default: (await import('./session-end-dialog.tsx')).SessionEndDialog }));
+
+/** The head every page stands under, and what may appear over or under any page. */
 export function Layout() {
+  const { data: me } = useMe();
+  const hasEnded = useSessionEnd();
   return (
     <>
       <a className="btn skip" href="#main">
         To the content
       </a>
-      <header className="top">
-        <Link className="brand" to="/">
-          <Mark />
-          <span>Voltiplano</span>
-        </Link>
-        <nav aria-label="Main">
-          <NavLink to="/try">Session desk</NavLink>
-          <NavLink to="/model">The model</NavLink>
-          <NavLink to="/schema">Schema</NavLink>
-        </nav>
-        <div className="top-right">
-          <DisplayMenu />
-        </div>
-      </header>
+      <TopBar me={me} />
       <main id="main" tabIndex={-1} className="outline-none">
         <Outlet />
       </main>
+      <Toasts />
+      {me && hasEnded && (
+        <Suspense fallback={null}>
+          <SessionEndDialog person={me.person} />
+        </Suspense>
+      )}
       <ScrollRestoration />
     </>
   );

@@ -1,7 +1,44 @@
-import { createBrowserRouter } from 'react-router-dom';
+import { createBrowserRouter, Navigate, type RouteObject } from 'react-router-dom';
 import { ErrorPage } from './error-page.tsx';
 import { Layout } from './layout.tsx';
 import { NotFoundPage } from './not-found-page.tsx';
+import { SignedIn } from './signed-in.tsx';
+
+const guestPages: RouteObject[] = [
+  {
+    path: '/',
+    lazy: async () => ({ Component: (await import('../features/landing/landing-page.tsx')).LandingPage }),
+  },
+  {
+    path: '/try',
+    lazy: async () => ({
+      Component: (await import('../features/session-desk/session-desk-page.tsx')).SessionDeskPage,
+    }),
+  },
+  {
+    path: '/model',
+    lazy: async () => ({ Component: (await import('../features/model/model-page.tsx')).ModelPage }),
+  },
+  {
+    path: '/schema',
+    lazy: async () => ({ Component: (await import('../features/schema/schema-page.tsx')).SchemaPage }),
+  },
+  {
+    path: '/sign-in',
+    lazy: async () => ({ Component: (await import('../features/sign-in/sign-in-page.tsx')).SignInPage }),
+  },
+];
+
+/** Below `/w/:workspaceId`. */
+const workspacePages: RouteObject[] = [{ index: true, element: <Navigate to="studies" replace /> }];
+
+const signedInPages: RouteObject[] = [
+  {
+    path: '/w/:workspaceId',
+    lazy: async () => ({ Component: (await import('./workspace-frame.tsx')).WorkspaceFrame }),
+    children: [...workspacePages, { path: '*', element: <NotFoundPage /> }],
+  },
+];
 
 /** Every page is a bundle of its own: the landing page never waits for the desk, nor either for Plotly. */
 export const router = createBrowserRouter([
@@ -14,24 +51,8 @@ export const router = createBrowserRouter([
       {
         errorElement: <ErrorPage />,
         children: [
-          {
-            path: '/',
-            lazy: async () => ({ Component: (await import('../features/landing/landing-page.tsx')).LandingPage }),
-          },
-          {
-            path: '/try',
-            lazy: async () => ({
-              Component: (await import('../features/session-desk/session-desk-page.tsx')).SessionDeskPage,
-            }),
-          },
-          {
-            path: '/model',
-            lazy: async () => ({ Component: (await import('../features/model/model-page.tsx')).ModelPage }),
-          },
-          {
-            path: '/schema',
-            lazy: async () => ({ Component: (await import('../features/schema/schema-page.tsx')).SchemaPage }),
-          },
+          ...guestPages,
+          { element: <SignedIn />, children: signedInPages },
           { path: '*', element: <NotFoundPage /> },
         ],
       },

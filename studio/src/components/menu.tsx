@@ -1,5 +1,6 @@
 import { DropdownMenu } from 'radix-ui';
 import type { ReactNode } from 'react';
+import { Link } from 'react-router-dom';
 
 type MenuProps = { trigger: ReactNode; align?: 'start' | 'end'; children: ReactNode };
 
@@ -23,6 +24,15 @@ export function MenuItem({ onSelect, disabled, children }: ItemProps) {
   return (
     <DropdownMenu.Item className="menu-item" disabled={disabled} onSelect={onSelect}>
       {children}
+    </DropdownMenu.Item>
+  );
+}
+
+/** A page that the menu leads to. */
+export function MenuLink({ to, children }: { to: string; children: ReactNode }) {
+  return (
+    <DropdownMenu.Item className="menu-item" asChild>
+      <Link to={to}>{children}</Link>
     </DropdownMenu.Item>
   );
 }

@@ -3,6 +3,7 @@ import type { Problem } from '../../../../server/src/contract/problem.ts';
 import { ApiProblem, isProblem, Unreachable } from './api-problem.ts';
 import { csrfToken } from './csrf-token.ts';
 import { refreshSession } from './refresh-session.ts';
+import { sessionEnd } from './session-end.ts';
 
 export type CallOptions<E extends Endpoint> = {
   params?: ParamsOf<E>;
@@ -25,6 +26,20 @@ export type CallOptions<E extends Endpoint> = {
  */
 export async function callApi<E extends Endpoint>(endpoint: E, options: CallOptions<E> = {}): Promise<AnswerOf<E>> {
   try {
+    return await sendFresh(endpoint, options);
+  } catch (error) {
+    if (endpoint.access !== 'anyone' && isSignedOut(error)) sessionEnd.tell();
+    throw error;
+  }
+}
+
+/** Whether the server knows nobody who makes the call. */
+export function isSignedOut(error: unknown): error is ApiProblem {
+  return isProblem(error, 'NOT_SIGNED_IN', 'SESSION_ENDED', 'REFRESH_REUSED');
+}
+
+async function sendFresh<E extends Endpoint>(endpoint: E, options: CallOptions<E>): Promise<AnswerOf<E>> {
+  try {
     return await send(endpoint, options);
   } catch (error) {
     if (!isProblem(error, 'ACCESS_EXPIRED')) throw error;
@@ -44,7 +59,13 @@ async function send<E extends Endpoint>(endpoint: E, options: CallOptions<E>): P
   };
   const response = await reach(addressOf(endpoint, options), init);
   if (response.ok) return (response.status === 204 ? undefined : await readJson(response)) as AnswerOf<E>;
-  throw new ApiProblem((await readJson(response)) as Problem);
+  throw new ApiProblem((await readJson(response)) as Problem, retryAfterOf(response));
+}
+
+/** Seconds that the server asks to wait, where it does. */
+function retryAfterOf(response: Response): number | null {
+  const seconds = Number.parseInt(response.headers.get('retry-after') ?? '', 10);
+  return Number.isNaN(seconds) ? null : seconds;
 }
 
 async function reach(address: string, init: RequestInit): Promise<Response> {

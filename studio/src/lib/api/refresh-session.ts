@@ -19,7 +19,7 @@ export function refreshSession<T>(ask: () => Promise<T>): Promise<T> {
     }
     await refresh();
     return ask();
-  }) as Promise<T>;
+  });
 }
 
 async function refresh(): Promise<void> {

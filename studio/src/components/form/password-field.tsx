@@ -1,0 +1,38 @@
+import { useState } from 'react';
+import type { UseFormRegisterReturn } from 'react-hook-form';
+import { FormField } from './form-field.tsx';
+
+type Props = {
+  label: string;
+  hint?: string;
+  error?: string | undefined;
+  autoComplete: 'current-password' | 'new-password';
+  registration: UseFormRegisterReturn;
+};
+
+/** A password, hidden until it is asked to be shown. */
+export function PasswordField({ label, hint, error, autoComplete, registration }: Props) {
+  const [isShown, setShown] = useState(false);
+  const toggle = (
+    <button
+      type="button"
+      className="lnk"
+      aria-pressed={isShown}
+      aria-label={`Show ${label.toLowerCase()}`}
+      onClick={() => setShown(!isShown)}
+    >
+      {isShown ? 'Hide' : 'Show'}
+    </button>
+  );
+  return (
+    <FormField label={label} error={error} beside={toggle} {...(hint ? { hint } : {})}>
+      <input
+        type={isShown ? 'text' : 'password'}
+        autoComplete={autoComplete}
+        autoCapitalize="none"
+        spellCheck={false}
+        {...registration}
+      />
+    </FormField>
+  );
+}
