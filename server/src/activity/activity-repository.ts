@@ -20,7 +20,13 @@ export type Deed = {
     | 'invitation.resent'
     | 'invitation.withdrawn'
     | 'apiToken.created'
-    | 'apiToken.revoked';
+    | 'apiToken.revoked'
+    | 'library.added'
+    | 'library.revised'
+    | 'library.restored'
+    | 'library.archived'
+    | 'library.unarchived'
+    | 'library.imported';
   subjectId?: string;
   detail?: Record<string, string>;
 };
@@ -34,11 +40,11 @@ export async function recordDeed({ db, now }: Core, deed: Deed): Promise<void> {
     .execute();
 }
 
-/** Deeds of a workspace, newest first. */
+/** Deeds of a workspace, or those done to one subject, newest first. */
 export async function listDeeds(
   { db }: Core,
   access: WorkspaceAccess,
-  { cursor, limit }: PageQuery,
+  { cursor, limit, subjectId }: PageQuery & { subjectId?: string | undefined },
 ): Promise<Page<Activity>> {
   access.require('read');
   let query = db
@@ -49,6 +55,7 @@ export async function listDeeds(
     .where('activity.workspaceId', '=', access.workspaceId)
     .orderBy('activity.seq', 'desc')
     .limit(limit + 1);
+  if (subjectId !== undefined) query = query.where('activity.subjectId', '=', subjectId);
   if (cursor !== undefined) query = query.where('activity.seq', '<', readCursor(cursor));
   const { rows, nextCursor } = cutPage(await query.execute(), limit, ({ seq }) => seq);
   const items = rows.map((row) => ({

@@ -1,6 +1,7 @@
 import { accountEndpoints } from './account.ts';
 import { apiTokenEndpoints } from './api-token.ts';
 import type { Endpoint } from './endpoint.ts';
+import { libraryEndpoints } from './library.ts';
 import { mailboxEndpoints } from './mailbox.ts';
 import { workspaceEndpoints } from './workspace.ts';
 
@@ -9,5 +10,6 @@ export const endpoints: readonly Endpoint[] = [
   accountEndpoints,
   workspaceEndpoints,
   apiTokenEndpoints,
+  libraryEndpoints,
   mailboxEndpoints,
 ].flatMap((group) => Object.values<Endpoint>(group));

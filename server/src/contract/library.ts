@@ -58,14 +58,13 @@ export const libraryUseSchema = z
   .meta({ id: 'LibraryUse' });
 export type LibraryUse = z.infer<typeof libraryUseSchema>;
 
+export const libraryFileItemSchema = z.object({ kind: libraryKindSchema, ...content }).meta({ id: 'LibraryFileItem' });
+
 export const libraryFileSchema = z
   .object({
     format: z.literal('voltiplano/library'),
     version: z.literal(1),
-    items: z
-      .array(z.object({ kind: libraryKindSchema, ...content }))
-      .min(1)
-      .max(500),
+    items: z.array(libraryFileItemSchema),
   })
   .meta({ id: 'LibraryFile', description: 'Parts without their history, to carry to another workspace' });
 export type LibraryFile = z.infer<typeof libraryFileSchema>;
@@ -92,7 +91,9 @@ export const libraryEndpoints = {
       order: orderSchema.default('asc'),
     }),
     status: 200,
-    answer: pageOf(libraryItemSchema).extend({ total: z.int() }),
+    answer: pageOf(libraryItemSchema).extend({
+      total: z.int().meta({ description: 'How many there are on all pages' }),
+    }),
     problems: [],
   }),
   createLibraryItem: defineEndpoint({
@@ -223,12 +224,12 @@ export const libraryEndpoints = {
     method: 'get',
     path: '/workspaces/:workspaceId/library-file',
     tag: 'Library',
-    summary: 'Parts outside the archive as a file: all, those of a kind, or one',
+    summary: 'Parts as a file: all outside the archive, those of a kind, or one',
     access: 'read',
     params: inWorkspace,
     query: z.object({ kind: libraryKindSchema.optional(), itemId: idSchema.optional() }),
     status: 200,
-    answer: libraryFileSchema.extend({ items: libraryFileSchema.shape.items.min(0) }),
+    answer: libraryFileSchema,
     problems: [],
   }),
   importLibrary: defineEndpoint({
@@ -240,7 +241,7 @@ export const libraryEndpoints = {
     access: 'edit-library',
     params: inWorkspace,
     body: z.object({
-      file: libraryFileSchema,
+      file: libraryFileSchema.extend({ items: z.array(libraryFileItemSchema).min(1).max(500) }),
       sameName: z.enum(['revise', 'add', 'skip']).default('revise').meta({
         description: 'Where a part of the same kind and name is there: save a revision of it, add another, or leave it',
       }),
@@ -255,5 +256,6 @@ export const libraryEndpoints = {
       .meta({ id: 'LibraryImport' }),
     problems: [],
     creates: true,
+    bodyLimit: '10mb',
   }),
 } as const;

@@ -6,6 +6,7 @@ import { apiTokenRoutes } from '../api-tokens/api-token-routes.ts';
 import { accountEndpoints } from '../contract/account.ts';
 import type { Core } from '../core.ts';
 import { healthRoutes } from '../health/health-routes.ts';
+import { libraryRoutes } from '../library/library-routes.ts';
 import type { LocalMailServer } from '../mail/local-mail-server.ts';
 import { mailboxRoutes } from '../mail/mailbox-routes.ts';
 import type { ProviderClient } from '../oidc/provider-client.ts';
@@ -63,6 +64,7 @@ function apiRoutes({ core, site, rateLimits, mailServer, provider }: AppDeps) {
   workspaceRoutes(api);
   invitationRoutes(api);
   apiTokenRoutes(api);
+  libraryRoutes(api);
   if (provider) providerRoutes(api, provider);
   if (mailServer) mailboxRoutes(api, mailServer);
   return api.router;

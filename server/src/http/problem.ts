@@ -1,7 +1,11 @@
 import { STATUS_CODES } from 'node:http';
 import type { ErrorRequestHandler, RequestHandler } from 'express';
+import type { StudyIssue } from '@voltiplano/engine';
 import type { z } from 'zod';
 import { type FieldError, type Problem, type ProblemCode, problemCodes } from '../contract/problem.ts';
+
+/** A person mends some at a time; a table of wrong type would fill megabytes. */
+const MOST_ERRORS = 100;
 
 /** Thrown by a route or service to answer a problem. The detail is shown to the person who asked. */
 export class HttpProblem extends Error {
@@ -18,9 +22,25 @@ export class HttpProblem extends Error {
 
 /** The problem of a value that a schema refused. @param part  part of the request that held it, such as `body` */
 export function invalidInput(part: string, { issues }: z.ZodError): HttpProblem {
-  const errors = issues.map(({ path, message }) => ({ path: [part, ...path].join('.'), message }));
+  return invalidFields(issues.map(({ path, message }) => ({ path: [part, ...path].join('.'), message })));
+}
+
+/** The problem of fields that are wrong; the first of them where there are very many. */
+export function invalidFields(errors: readonly FieldError[]): HttpProblem {
   const [first] = errors;
-  return new HttpProblem('INVALID_INPUT', first ? `${first.path}: ${first.message}` : 'A field is wrong.', { errors });
+  const more = errors.length > MOST_ERRORS ? ` Of ${errors.length} errors the first ${MOST_ERRORS} are listed.` : '';
+  const detail = first ? `${first.path}: ${first.message}` : 'A field is wrong.';
+  return new HttpProblem('INVALID_INPUT', detail + more, { errors: errors.slice(0, MOST_ERRORS) });
+}
+
+/** What the engine says against a study or a part of one. @param place  where that stood, such as `body.inputs` */
+export function errorsAt(place: string, issues: readonly StudyIssue[]): FieldError[] {
+  return issues.map(({ path, message }) => ({ path: dotted(`${place}.${path}`), message }));
+}
+
+/** `legs[1].km` as every path of the API is written: `legs.1.km`. */
+function dotted(path: string): string {
+  return path.replaceAll(/\[(\d+)\]/g, '.$1').replace(/\.$/, '');
 }
 
 /** The problem of one field that only a service can judge. */

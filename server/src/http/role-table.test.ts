@@ -3,6 +3,7 @@ import { signAccessToken } from '../account/access-token.ts';
 import { endpoints } from '../contract/endpoints.ts';
 import type { ProblemCode } from '../contract/problem.ts';
 import type { TestBrowser } from '../testing/test-browser.ts';
+import { examplePart } from '../testing/example-parts.ts';
 import { startTestServer, type TestServer } from '../testing/test-server.ts';
 import { insertToken, makeWorld, type TestWorld } from '../testing/test-world.ts';
 
@@ -36,15 +37,27 @@ const ended = 'API_TOKEN_INVALID' as const;
 const person: Verdict[] = [...strangers, may, may, may, may, may, may, session, session, session, ended];
 const members: Verdict[] = [...strangers, may, may, may, may, gone, gone, may, may, gone, ended];
 const owners: Verdict[] = [...strangers, no, no, no, may, gone, gone, no, may, gone, ended];
+const engineers: Verdict[] = [...strangers, no, no, may, may, gone, gone, no, may, gone, ended];
 const memberPersons: Verdict[] = [...strangers, may, may, may, may, gone, gone, session, session, gone, ended];
 
-type Row = { verdicts: Verdict[]; status?: number; params?: object; body?: object; query?: Record<string, string> };
+type Row = {
+  verdicts: Verdict[];
+  status?: number;
+  params?: object;
+  body?: object;
+  query?: Record<string, string>;
+  headers?: Record<string, string>;
+};
 type RowOf = (world: TestWorld) => Row;
 
 const email = 'new@puna.example';
 const password = 'a windy plateau';
 const inWorkspace = ({ workspaceId }: TestWorld) => ({ workspaceId });
 const bystander = ({ workspaceId, people }: TestWorld) => ({ workspaceId, personId: people.bystander });
+const cell = ({ workspaceId, libraryItemId }: TestWorld) => ({ workspaceId, itemId: libraryItemId });
+const firstOfCell = (world: TestWorld) => ({ ...cell(world), revision: '1' });
+const content = { name: 'Suri cell', notes: '', source: '', body: examplePart('cell') };
+const file = { format: 'voltiplano/library', version: 1, items: [{ kind: 'cell', ...content }] };
 const invited = ({ workspaceId, invitation }: TestWorld) => ({ workspaceId, invitationId: invitation.id });
 
 /** A row for each endpoint. `status` is what success looks like where the world has nothing for it to succeed with. */
@@ -103,6 +116,32 @@ const table: Record<string, RowOf> = {
   invite: (world) => ({ verdicts: owners, params: inWorkspace(world), body: { email, role: 'viewer' } }),
   resendInvitation: (world) => ({ verdicts: owners, params: invited(world) }),
   withdrawInvitation: (world) => ({ verdicts: owners, params: invited(world) }),
+
+  listLibrary: (world) => ({ verdicts: members, params: inWorkspace(world) }),
+  readLibraryItem: (world) => ({ verdicts: members, params: cell(world) }),
+  listLibraryRevisions: (world) => ({ verdicts: members, params: cell(world) }),
+  readLibraryRevision: (world) => ({ verdicts: members, params: firstOfCell(world) }),
+  listLibraryUse: (world) => ({ verdicts: members, params: cell(world) }),
+  exportLibrary: (world) => ({ verdicts: members, params: inWorkspace(world) }),
+  createLibraryItem: (world) => ({
+    verdicts: engineers,
+    params: inWorkspace(world),
+    body: { kind: 'cell', ...content },
+  }),
+  reviseLibraryItem: (world) => ({
+    verdicts: engineers,
+    params: cell(world),
+    headers: { 'If-Match': '"r2"' },
+    body: content,
+  }),
+  restoreLibraryRevision: (world) => ({
+    verdicts: engineers,
+    params: firstOfCell(world),
+    headers: { 'If-Match': '"r2"' },
+  }),
+  archiveLibraryItem: (world) => ({ verdicts: engineers, params: cell(world) }),
+  unarchiveLibraryItem: (world) => ({ verdicts: engineers, params: cell(world) }),
+  importLibrary: (world) => ({ verdicts: engineers, params: inWorkspace(world), body: { file } }),
 };
 
 /** Refreshing has its own tests: a browser without a session has nothing to refresh. */
@@ -130,7 +169,8 @@ describe('routes × roles', () => {
       const { browser, headers } = await actAs(actor, world);
       const before = await rowsOf(world);
       const { params, body, query } = row ?? {};
-      const answer = await browser.call(endpoint, { params, body, query, headers } as object);
+      const call = { params, body, query, headers: { ...row?.headers, ...headers } };
+      const answer = await browser.call(endpoint, call as object);
       wanted[actor] = verdict === may ? (row?.status ?? endpoint.status) : verdict;
       found[actor] = verdict === may ? answer.status : (answer.body.code ?? answer.status);
       if (verdict !== may)
@@ -209,11 +249,17 @@ async function removedBrowser({ people, workspaceId }: TestWorld): Promise<TestB
 /** Everything of a workspace, as text to compare. */
 async function rowsOf({ workspaceId }: TestWorld): Promise<string> {
   const { db } = server.core;
-  const tables = ['members', 'invitations', 'activity'] as const;
+  const tables = ['members', 'invitations', 'activity', 'libraryItems'] as const;
   const rows = await Promise.all([
     db.selectFrom('workspaces').selectAll().where('id', '=', workspaceId).execute(),
     ...tables.map((table) => db.selectFrom(table).selectAll().where('workspaceId', '=', workspaceId).execute()),
     db.selectFrom('apiTokens').select(['id', 'revokedAt']).where('workspaceId', '=', workspaceId).execute(),
+    db
+      .selectFrom('libraryRevisions')
+      .innerJoin('libraryItems', 'libraryItems.id', 'libraryRevisions.itemId')
+      .selectAll('libraryRevisions')
+      .where('workspaceId', '=', workspaceId)
+      .execute(),
   ]);
   return JSON.stringify(rows);
 }

@@ -65,6 +65,6 @@ export class TestBrowser {
 
 function valueOf(params: object | undefined, name: string): string {
   const value = Object.entries(params ?? {}).find(([key]) => key === name)?.[1] as unknown;
-  if (typeof value !== 'string') throw new Error(`The path needs ${name}.`);
-  return value;
+  if (typeof value !== 'string' && typeof value !== 'number') throw new Error(`The path needs ${name}.`);
+  return String(value);
 }

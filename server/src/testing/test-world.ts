@@ -2,6 +2,7 @@ import { insertPerson } from '../account/people-repository.ts';
 import { type Role, roles } from '../contract/roles.ts';
 import { newId, newSecret, hashSecret } from '../db/secret-tokens.ts';
 import { insertWorkspace } from '../workspaces/workspace-repository.ts';
+import { examplePart } from './example-parts.ts';
 import type { TestServer } from './test-server.ts';
 
 const DAY_MS = 24 * 3_600_000;
@@ -16,6 +17,8 @@ export type TestWorld = {
   invitation: { id: string; token: string; email: string };
   /** An API token that the bystander made, of role viewer. */
   apiToken: { id: string; secret: string };
+  /** A cell in the library, of two revisions. */
+  libraryItemId: string;
 };
 
 let serial = 0;
@@ -71,7 +74,8 @@ export function makeWorld({ core }: TestServer): Promise<TestWorld> {
       })
       .execute();
     const apiToken = await insertToken(inner, { workspaceId, personId: people.bystander, role: 'viewer' });
-    return { ...world, invitation, apiToken };
+    const libraryItemId = await insertCell(inner, { workspaceId, personId: people.bystander });
+    return { ...world, invitation, apiToken, libraryItemId };
   });
 }
 
@@ -93,4 +97,28 @@ export async function insertToken(
     .values({ ...values, lastUsedAt: null, revokedAt: null })
     .execute();
   return { id, secret };
+}
+
+/** A cell of two revisions straight into the database. */
+async function insertCell(
+  { db, now }: TestServer['core'],
+  { workspaceId, personId }: { workspaceId: string; personId: string },
+): Promise<string> {
+  const id = newId();
+  const head = { name: 'Vicuña cell', sortName: 'vicuna cell', revision: 2, changedAt: now(), changedBy: personId };
+  await db
+    .insertInto('libraryItems')
+    .values({ id, workspaceId, kind: 'cell', ...head, archivedAt: null })
+    .execute();
+  for (const [revision, notes] of [
+    [1, ''],
+    [2, 'Measured'],
+  ] as const) {
+    const said = { name: head.name, notes, source: 'Bench', body: JSON.stringify(examplePart('cell')), message: notes };
+    await db
+      .insertInto('libraryRevisions')
+      .values({ itemId: id, revision, ...said, createdAt: now(), createdBy: personId })
+      .execute();
+  }
+  return id;
 }
