@@ -44,6 +44,19 @@ export type Call<E extends Endpoint> = {
 type Result<E extends Endpoint> = (E extends { answer: z.ZodType } ? AnswerOf<E> : void) | typeof ANSWERED;
 export type Handler<E extends Endpoint> = (call: Call<E>) => Result<E> | Promise<Result<E>>;
 
+/**
+ * A call in two steps. There is one database connection, so whatever takes long is done in `prepare`, before the
+ * transaction of a call that creates something; `handle` gets what it made. In between things may have changed:
+ * `handle` checks again what it relies on.
+ */
+export type Steps<E extends Endpoint, P> = {
+  prepare: (call: Call<E>) => P | Promise<P>;
+  handle: (call: Call<E>, prepared: P) => Result<E> | Promise<Result<E>>;
+};
+
+/** With or without a first step. */
+type AnySteps<E extends Endpoint> = Steps<E, unknown> | { handle: Handler<E> };
+
 type ApiDeps = { core: Core; site: Site; rateLimits: RateLimits };
 
 /** Mounts endpoints: each is judged, parsed and answered as its description says, so that no route can forget it. */
@@ -62,18 +75,19 @@ export class Api {
     });
   }
 
-  serve<E extends Endpoint>(endpoint: E, handler: Handler<E>): void {
+  serve<E extends Endpoint, P>(endpoint: E, handler: Handler<E> | Steps<E, P>): void {
     const takeBody = express.json({ limit: endpoint.bodyLimit ?? BODY_LIMIT });
     // Tries are counted by the e-mail in the body too; else a body is taken only from who may send it.
     const limiters = endpoint.limited ? [takeBody, ...this.limiters[endpoint.limited]] : [];
+    const steps = (typeof handler === 'function' ? { handle: handler } : handler) as AnySteps<E>;
     this.router[endpoint.method](endpoint.path, ...limiters, async (req, res) => {
-      await this.answer(endpoint, handler, takeBody, req, res);
+      await this.answer(endpoint, steps, takeBody, req, res);
     });
   }
 
   private async answer<E extends Endpoint>(
     endpoint: E,
-    handler: Handler<E>,
+    steps: AnySteps<E>,
     takeBody: RequestHandler,
     req: Request,
     res: Response,
@@ -88,7 +102,14 @@ export class Api {
     await finished(takeBody, req, res);
     const body = parse('body', endpoint.body, req.body ?? {});
     const judged = { params, query, body, ifMatch, actor, access, req, res };
-    const run = (inner: Core) => handler({ ...judged, core: inner } as Call<E>);
+    const run: Run = {
+      prepare: () => ('prepare' in steps ? steps.prepare({ ...judged, core } as Call<E>) : undefined),
+      handle: async (inner, prepared) => {
+        // Somebody may have lost their role meanwhile.
+        const again = 'prepare' in steps && actor ? await openAccess(inner, endpoint, actor, params) : access;
+        return steps.handle({ ...judged, access: again, core: inner } as Call<E>, prepared);
+      },
+    };
     const call = actor && endpoint.creates ? keyedCall(req, actor, [body, ifMatch]) : null;
     const { status, answer } = call
       ? await runKeyed(core, call, endpoint.status, res, run)
@@ -146,27 +167,39 @@ function parse(part: string, schema: z.ZodObject | undefined, value: unknown): u
   return parsed.data;
 }
 
-function runPlain<T>(core: Core, { creates }: Endpoint, run: (core: Core) => T | Promise<T>): T | Promise<T> {
-  return creates ? inTransaction(core.db, async (db) => run({ ...core, db })) : run(core);
+/** The steps of one call, on the database or in a transaction. */
+type Run = { prepare: () => unknown; handle: (core: Core, prepared: unknown) => Promise<unknown> };
+
+async function runPlain(core: Core, { creates }: Endpoint, { prepare, handle }: Run): Promise<unknown> {
+  const prepared = await prepare();
+  return creates ? inTransaction(core.db, (db) => handle({ ...core, db }, prepared)) : handle(core, prepared);
 }
 
 /** The call and its kept answer stand or fall together, so a repeated call finds either both or neither. */
-function runKeyed(
+async function runKeyed(
   core: Core,
   call: KeyedCall,
   status: number,
   res: Response,
-  run: (core: Core) => unknown,
+  { prepare, handle }: Run,
 ): Promise<{ status: number; answer: unknown }> {
+  // A call that was answered is not prepared again, which would judge it by what it has changed itself.
+  const known = await findKeptAnswer(core, call);
+  if (known) return asAnswer(known, res);
+  const prepared = await prepare();
   return inTransaction(core.db, async (db) => {
     const inner = { ...core, db };
-    const kept: KeptAnswer | null = await findKeptAnswer(inner, call);
-    if (kept?.etag) res.set('ETag', kept.etag);
-    if (kept) return { status: kept.status, answer: kept.body };
-    const answer = await run(inner);
+    const kept = await findKeptAnswer(inner, call);
+    if (kept) return asAnswer(kept, res);
+    const answer = await handle(inner, prepared);
     await keepAnswer(inner, call, { status, body: answer, etag: res.get('ETag') ?? null });
     return { status, answer };
   });
+}
+
+function asAnswer({ status, body, etag }: KeptAnswer, res: Response): { status: number; answer: unknown } {
+  if (etag) res.set('ETag', etag);
+  return { status, answer: body };
 }
 
 function keyedCall(req: Request, { personId }: Actor, [body, ifMatch]: [unknown, string?]): KeyedCall | null {
