@@ -1,6 +1,7 @@
 import type { Logger } from 'pino';
 import type { Db } from './db/database.ts';
 import type { Post } from './mail/post.ts';
+import type { HeadlineRuns } from './runs/headline-runs.ts';
 import type { Secrets } from './secrets/secrets.ts';
 
 /** What every service works with. */
@@ -9,6 +10,8 @@ export type Core = {
   db: Db;
   secrets: Secrets;
   post: Post;
+  /** Runs the engine beside the server. */
+  runs: HeadlineRuns;
   logger: Logger;
   /** Clock of dates [ms since 1970-01-01T00:00Z]. */
   now: () => number;

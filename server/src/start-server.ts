@@ -13,6 +13,7 @@ import { openPost } from './mail/post.ts';
 import { smtpDelivery } from './mail/smtp.ts';
 import { type LocalProvider, startLocalProvider } from './oidc/local-provider.ts';
 import { providerClient } from './oidc/provider-client.ts';
+import { HeadlineRuns } from './runs/headline-runs.ts';
 import { loadSecrets } from './secrets/secrets.ts';
 import { databaseFileIn, prepareDataDir, type Settings } from './settings.ts';
 
@@ -52,7 +53,7 @@ async function startOn(
   let address = '';
   const publicUrl = () => settings.publicUrl ?? address;
   const core = openCore(db, settings, logger, mailServer, publicUrl);
-  stop.push(core.post.close);
+  stop.push(core.post.close, () => core.runs.close());
   const app = createApp({
     studioDir: settings.studioDir,
     version: ownVersion(),
@@ -86,7 +87,7 @@ function openCore(
   const secrets = loadSecrets(dataDir);
   const deliver = smtpDelivery(smtpUrl ?? mailServer?.url ?? '', mailFrom);
   const post = openPost({ db, sealingKey: secrets.sealing, deliver, logger, now: Date.now });
-  return { db, secrets, post, logger, now: Date.now, publicUrl };
+  return { db, secrets, post, runs: new HeadlineRuns(), logger, now: Date.now, publicUrl };
 }
 
 /** The configured provider; in development a local one, which starts when somebody first uses it. */

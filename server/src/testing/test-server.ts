@@ -17,6 +17,7 @@ import { startLocalMailServer } from '../mail/local-mail-server.ts';
 import { openPost } from '../mail/post.ts';
 import { smtpDelivery } from '../mail/smtp.ts';
 import type { ProviderClient } from '../oidc/provider-client.ts';
+import { HeadlineRuns } from '../runs/headline-runs.ts';
 import { loadSecrets } from '../secrets/secrets.ts';
 import { TestBrowser } from './test-browser.ts';
 
@@ -57,7 +58,8 @@ export async function startTestServer(wishes: Wishes = {}): Promise<TestServer> 
   const post = openPost({ db, sealingKey: secrets.sealing, deliver, logger, now });
   let address = '';
   const publicUrl = () => address;
-  const core: Core = { db, secrets, post, logger, now, publicUrl };
+  const runs = new HeadlineRuns();
+  const core: Core = { db, secrets, post, runs, logger, now, publicUrl };
   const appDeps: AppDeps = {
     studioDir: dir,
     version: '1.2.3',
@@ -82,6 +84,7 @@ export async function startTestServer(wishes: Wishes = {}): Promise<TestServer> 
     mailTo: (email) => waitForMail(email, mailServer.mails),
     close: async () => {
       await closeGracefully(server, 1000);
+      await runs.close();
       await post.close();
       await mailServer.close();
       await db.destroy();
