@@ -26,7 +26,12 @@ export type Deed = {
     | 'library.restored'
     | 'library.archived'
     | 'library.unarchived'
-    | 'library.imported';
+    | 'library.imported'
+    | 'study.created'
+    | 'study.revised'
+    | 'study.copied'
+    | 'study.archived'
+    | 'study.unarchived';
   subjectId?: string;
   detail?: Record<string, string>;
 };

@@ -3,6 +3,7 @@ import { apiTokenEndpoints } from './api-token.ts';
 import type { Endpoint } from './endpoint.ts';
 import { libraryEndpoints } from './library.ts';
 import { mailboxEndpoints } from './mailbox.ts';
+import { studyEndpoints } from './study.ts';
 import { workspaceEndpoints } from './workspace.ts';
 
 /** Every call below `/api/v1`. */
@@ -11,5 +12,6 @@ export const endpoints: readonly Endpoint[] = [
   workspaceEndpoints,
   apiTokenEndpoints,
   libraryEndpoints,
+  studyEndpoints,
   mailboxEndpoints,
 ].flatMap((group) => Object.values<Endpoint>(group));

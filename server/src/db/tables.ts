@@ -1,6 +1,7 @@
 import type { ColumnType, Generated } from 'kysely';
 import type { LibraryKind } from '../contract/library.ts';
 import type { Role } from '../contract/roles.ts';
+import type { StudyKind, StudyState } from '../contract/study-words.ts';
 
 /** Moment [ms since 1970-01-01T00:00Z]. */
 type Moment = number;
@@ -153,6 +154,73 @@ type LibraryRevisionsTable = {
 /** Words of the newest revision of each item, filled by triggers; searched with MATCH, never read. */
 type LibrarySearchTable = { rowid: Fixed<number> };
 
+type StudiesTable = {
+  /** The row in `studySearch`; rises in the order of creation. */
+  seq: Generated<number>;
+  id: Fixed<string>;
+  workspaceId: Fixed<string>;
+  /** Counts the studies of a workspace. */
+  number: Fixed<number>;
+  kind: Fixed<StudyKind>;
+  state: StudyState;
+  ownerId: string | null;
+  title: string;
+  /** `sortText` of the title. */
+  sortTitle: string;
+  packName: string | null;
+  stationName: string | null;
+  /** Names of pack, cell, stations and strategy, one a line, for the search. */
+  partNames: string;
+  createdAt: Fixed<Moment>;
+  /** Of the working copy. */
+  changedAt: Moment;
+  changedBy: string | null;
+  archivedAt: Moment | null;
+  newestRevision: number;
+  /** `contentHash` of the newest revision. */
+  revisionHash: string;
+  /** Numbers of the newest revision, to sort by. */
+  minutes10To80: number | null;
+  hottestCoreC: number | null;
+  workingVersion: number;
+  /** `contentHash` of the working copy. */
+  workingHash: string;
+  hasPending: 0 | 1;
+  /** JSON object. */
+  workingPending: string;
+  /** Study file. */
+  workingInputs: string;
+};
+
+/** Triggers refuse to change or delete a row. */
+type StudyRevisionsTable = {
+  studyId: Fixed<string>;
+  revision: Fixed<number>;
+  message: Fixed<string>;
+  authorId: Fixed<string | null>;
+  createdAt: Fixed<Moment>;
+  title: Fixed<string>;
+  engineVersion: Fixed<string>;
+  /** JSON of `Headline`. */
+  headline: Fixed<string>;
+  /** JSON of `PartReference[]`. */
+  parts: Fixed<string>;
+  /** Study file. */
+  inputs: Fixed<string>;
+};
+
+/** Revisions of the library that parts of a working copy were taken from. */
+type StudyPartsTable = {
+  studyId: Fixed<string>;
+  part: Fixed<LibraryKind>;
+  itemId: Fixed<string>;
+  revision: Fixed<number>;
+  keptAgainst: Fixed<number | null>;
+};
+
+/** Words of each study, filled by triggers; searched with MATCH. */
+type StudySearchTable = { rowid: Fixed<number> };
+
 /** The schema as the migrations leave it. */
 export type Tables = {
   people: PeopleTable;
@@ -170,4 +238,8 @@ export type Tables = {
   libraryItems: LibraryItemsTable;
   libraryRevisions: LibraryRevisionsTable;
   librarySearch: LibrarySearchTable;
+  studies: StudiesTable;
+  studyRevisions: StudyRevisionsTable;
+  studyParts: StudyPartsTable;
+  studySearch: StudySearchTable;
 };

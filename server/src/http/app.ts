@@ -12,6 +12,7 @@ import { mailboxRoutes } from '../mail/mailbox-routes.ts';
 import type { ProviderClient } from '../oidc/provider-client.ts';
 import { providerRoutes } from '../oidc/provider-routes.ts';
 import { openApiRoutes } from '../openapi/openapi-routes.ts';
+import { studyRoutes } from '../studies/study-routes.ts';
 import { invitationRoutes, workspaceRoutes } from '../workspaces/workspace-routes.ts';
 import { Api } from './api.ts';
 import { answerProblem, notFound } from './problem.ts';
@@ -65,6 +66,7 @@ function apiRoutes({ core, site, rateLimits, mailServer, provider }: AppDeps) {
   invitationRoutes(api);
   apiTokenRoutes(api);
   libraryRoutes(api);
+  studyRoutes(api);
   if (provider) providerRoutes(api, provider);
   if (mailServer) mailboxRoutes(api, mailServer);
   return api.router;

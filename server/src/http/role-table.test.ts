@@ -2,6 +2,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { signAccessToken } from '../account/access-token.ts';
 import { endpoints } from '../contract/endpoints.ts';
 import type { ProblemCode } from '../contract/problem.ts';
+import { exampleStudy } from '../testing/example-study.ts';
 import type { TestBrowser } from '../testing/test-browser.ts';
 import { examplePart } from '../testing/example-parts.ts';
 import { startTestServer, type TestServer } from '../testing/test-server.ts';
@@ -36,6 +37,7 @@ const ended = 'API_TOKEN_INVALID' as const;
 // Columns as in `actors`. Written out by hand from the table of roles, not read from the endpoints.
 const person: Verdict[] = [...strangers, may, may, may, may, may, may, session, session, session, ended];
 const members: Verdict[] = [...strangers, may, may, may, may, gone, gone, may, may, gone, ended];
+const analysts: Verdict[] = [...strangers, no, may, may, may, gone, gone, no, may, gone, ended];
 const owners: Verdict[] = [...strangers, no, no, no, may, gone, gone, no, may, gone, ended];
 const engineers: Verdict[] = [...strangers, no, no, may, may, gone, gone, no, may, gone, ended];
 const memberPersons: Verdict[] = [...strangers, may, may, may, may, gone, gone, session, session, gone, ended];
@@ -58,6 +60,7 @@ const cell = ({ workspaceId, libraryItemId }: TestWorld) => ({ workspaceId, item
 const firstOfCell = (world: TestWorld) => ({ ...cell(world), revision: '1' });
 const content = { name: 'Suri cell', notes: '', source: '', body: examplePart('cell') };
 const file = { format: 'voltiplano/library', version: 1, items: [{ kind: 'cell', ...content }] };
+const study = ({ workspaceId, study: { id } }: TestWorld) => ({ workspaceId, studyId: id });
 const invited = ({ workspaceId, invitation }: TestWorld) => ({ workspaceId, invitationId: invitation.id });
 
 /** A row for each endpoint. `status` is what success looks like where the world has nothing for it to succeed with. */
@@ -107,6 +110,27 @@ const table: Record<string, RowOf> = {
     verdicts: memberPersons.map((verdict, i) => (verdict === may && actors[i] !== 'owner' ? gone : verdict)),
     params: { workspaceId: world.workspaceId, tokenId: world.apiToken.id },
   }),
+
+  listStudies: (world) => ({ verdicts: members, params: inWorkspace(world) }),
+  readStudy: (world) => ({ verdicts: members, params: study(world) }),
+  listStudyRevisions: (world) => ({ verdicts: members, params: study(world) }),
+  readStudyRevision: (world) => ({ verdicts: members, params: { ...study(world), revision: '1' } }),
+  createStudy: (world) => ({ verdicts: analysts, params: inWorkspace(world), body: { inputs: exampleStudy() } }),
+  writeWorkingCopy: (world) => ({
+    verdicts: analysts,
+    params: study(world),
+    body: { inputs: exampleStudy() },
+    headers: { 'If-Match': '"w2"' },
+  }),
+  saveRevision: (world) => ({
+    verdicts: analysts,
+    params: study(world),
+    body: { message: 'Warmer' },
+    headers: { 'If-Match': '"w2"' },
+  }),
+  copyStudy: (world) => ({ verdicts: analysts, params: study(world), body: {} }),
+  archiveStudy: (world) => ({ verdicts: analysts, params: study(world) }),
+  unarchiveStudy: (world) => ({ verdicts: analysts, params: study(world) }),
 
   renameWorkspace: (world) => ({ verdicts: owners, params: inWorkspace(world), body: { name: 'Other' } }),
   deleteWorkspace: (world) => ({ verdicts: owners, params: inWorkspace(world), body: { name: world.name } }),
@@ -249,7 +273,7 @@ async function removedBrowser({ people, workspaceId }: TestWorld): Promise<TestB
 /** Everything of a workspace, as text to compare. */
 async function rowsOf({ workspaceId }: TestWorld): Promise<string> {
   const { db } = server.core;
-  const tables = ['members', 'invitations', 'activity', 'libraryItems'] as const;
+  const tables = ['members', 'invitations', 'activity', 'libraryItems', 'studies'] as const;
   const rows = await Promise.all([
     db.selectFrom('workspaces').selectAll().where('id', '=', workspaceId).execute(),
     ...tables.map((table) => db.selectFrom(table).selectAll().where('workspaceId', '=', workspaceId).execute()),

@@ -1,8 +1,15 @@
 import { insertPerson } from '../account/people-repository.ts';
 import { type Role, roles } from '../contract/roles.ts';
+import type { PartReference } from '../contract/study.ts';
 import { newId, newSecret, hashSecret } from '../db/secret-tokens.ts';
+import { etagOf } from '../http/if-match.ts';
+import { failedHeadline } from '../runs/compute-headline.ts';
+import { engineVersion } from '../runs/headline-runs.ts';
+import { createStudy, writeWorkingCopy } from '../studies/study-service.ts';
+import { WorkspaceAccess } from '../workspaces/workspace-access.ts';
 import { insertWorkspace } from '../workspaces/workspace-repository.ts';
 import { examplePart } from './example-parts.ts';
+import { exampleStudy } from './example-study.ts';
 import type { TestServer } from './test-server.ts';
 
 const DAY_MS = 24 * 3_600_000;
@@ -19,6 +26,8 @@ export type TestWorld = {
   apiToken: { id: string; secret: string };
   /** A cell in the library, of two revisions. */
   libraryItemId: string;
+  /** The analyst's study, whose working copy, at version 2, differs from its one revision. */
+  study: { id: string };
 };
 
 let serial = 0;
@@ -75,8 +84,26 @@ export function makeWorld({ core }: TestServer): Promise<TestWorld> {
       .execute();
     const apiToken = await insertToken(inner, { workspaceId, personId: people.bystander, role: 'viewer' });
     const libraryItemId = await insertCell(inner, { workspaceId, personId: people.bystander });
-    return { ...world, invitation, apiToken, libraryItemId };
+    const study = await makeStudy(inner, workspaceId, { personId: analyst, cellId: libraryItemId });
+    return { ...world, invitation, apiToken, libraryItemId, study };
   });
+}
+
+/** A study with a changed working copy that uses a cell of the library, without a run of the engine. */
+async function makeStudy(
+  core: TestServer['core'],
+  workspaceId: string,
+  { personId, cellId }: { personId: string; cellId: string },
+): Promise<{ id: string }> {
+  const actor = { kind: 'session', personId, sessionId: 'none' } as const;
+  const access = await WorkspaceAccess.open(core.db, actor, workspaceId);
+  const inputs = exampleStudy();
+  const parts: PartReference[] = [{ part: 'cell', itemId: cellId, revision: 1, keptAgainst: null }];
+  const beginning = { inputs, parts, message: 'Created' };
+  const { id } = await createStudy(core, access, beginning, failedHeadline('Not run', engineVersion));
+  const changed = { inputs: { ...inputs, title: `${inputs.title}, changed` }, parts, pending: {} };
+  await writeWorkingCopy(core, access, id, changed, etagOf('w', 1));
+  return { id };
 }
 
 /** An API token straight into the database. */
