@@ -3,7 +3,7 @@ import { Button } from '../../../components/button.tsx';
 import { Menu, MenuHeading, MenuItem, MenuRule } from '../../../components/menu.tsx';
 import { useDispatch } from '../hooks/use-desk.ts';
 import type { StudyFiles } from '../hooks/use-study-files.ts';
-import { examples } from '../model/examples.ts';
+import { examples } from '../../../lib/examples.ts';
 import { ExportMenu } from './export-menu.tsx';
 import type { Drawings } from './results-panel.tsx';
 

@@ -1,6 +1,6 @@
 import { freshDesk } from '../model/desk-state.ts';
 import { createDeskStore, type DeskStore } from '../model/desk-store.ts';
-import { examples } from '../model/examples.ts';
+import { examples } from '../../../lib/examples.ts';
 import { readKeptDesk } from '../model/kept-desk.ts';
 import { openLinkedStudy, type OpenReport } from './open-linked-study.ts';
 import { setDeskAside, storedDesk } from './desk-storage.ts';

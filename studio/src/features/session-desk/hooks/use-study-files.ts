@@ -1,7 +1,7 @@
 import { saveFile } from '../../../charts/chart-export.ts';
 import { useCallback, useMemo, useState } from 'react';
 import type { DeskStore } from '../model/desk-store.ts';
-import type { Example } from '../model/examples.ts';
+import type { Example } from '../../../lib/examples.ts';
 import { studyFile, type TextFile } from '../model/export-files.ts';
 import { readStudyFile } from '../model/study-file.ts';
 import { studyLink } from '../model/study-link.ts';

@@ -1,7 +1,7 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { parseSessionStudy, simulateSession, type LimitCode } from '@voltiplano/engine';
 import { expect, test } from 'vitest';
-import { examples } from './examples.ts';
+import { examples } from '../../../lib/examples.ts';
 import { readStudyFile, studyFileText } from './study-file.ts';
 import { sessionSentence } from './session-sentence.ts';
 
