@@ -36,7 +36,7 @@ export function libraryRoutes(api: Api): void {
   api.serve(library.readLibraryRevision, ({ core, access, params }) =>
     getRevision(core, access, params.itemId, params.revision),
   );
-  api.serve(library.listLibraryUse, ({ core, access, params }) => listUse(core, access, params.itemId));
+  api.serve(library.listLibraryUse, ({ core, access, params, query }) => listUse(core, access, params.itemId, query));
   api.serve(library.exportLibrary, ({ core, access, query }) => exportItems(core, access, query));
   api.serve(library.importLibrary, ({ core, access, body }) => importItems(core, access, body));
 }
