@@ -32,7 +32,8 @@ export const InputsPanel = memo(function InputsPanel() {
   );
 });
 
-function UndoActions() {
+/** The last change taken back, or made again. */
+export function UndoActions() {
   const dispatch = useDispatch();
   const last = useDesk((state) => state.past.at(-1)?.label);
   const next = useDesk((state) => state.future[0]?.label);

@@ -76,7 +76,8 @@ function without(pending: Record<string, Entry>, gone: [string, Entry][]): Recor
   return Object.fromEntries(Object.entries(pending).filter(([path]) => !names.has(path)));
 }
 
-function applied(study: SessionStudyInput, entries: [string, Entry][]): SessionStudyInput {
+/** The study with entries made in it, whether that can be run or not; text and unreadable tables are left out. */
+export function applied(study: SessionStudyInput, entries: [string, Entry][]): SessionStudyInput {
   return entries.reduce((result, [path, entry]) => {
     if (typeof entry === 'string') return result;
     if (!Array.isArray(entry)) return withValueAt(result, path, entry ?? undefined);
@@ -88,7 +89,8 @@ function applied(study: SessionStudyInput, entries: [string, Entry][]): SessionS
   }, study);
 }
 
-function isReadable(draft: Draft, path: string, entry: Entry): boolean {
+/** Whether an entry holds numbers only, so that it could stand in the study. */
+export function isReadable(draft: Draft, path: string, entry: Entry): boolean {
   if (!Array.isArray(entry)) return typeof entry !== 'string';
   return tableAt(path, draft.study.strategy.taper) !== undefined && isReadableGrid(entry);
 }
