@@ -8,7 +8,7 @@ import { useAnswered, useRun } from '../hooks/run-context.ts';
 import { useDesk } from '../hooks/use-desk.ts';
 import type { SessionPartKind } from '../model/carriers.ts';
 import { issuesOf } from '../model/derived.ts';
-import { examples, type Example } from '../model/examples.ts';
+import { examples, type Example } from '../../../lib/examples.ts';
 import { RunFailureNotice, WaitingInputs } from './run-notices.tsx';
 import { SessionSentence } from './session-sentence.tsx';
 

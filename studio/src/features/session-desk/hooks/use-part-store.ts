@@ -1,6 +1,6 @@
 import { useCallback, useEffect, useRef, useState } from 'react';
 import { carrierFor, type PartBody, type SessionPartKind } from '../model/carriers.ts';
-import type { Example } from '../model/examples.ts';
+import type { Example } from '../../../lib/examples.ts';
 import { createPartStore, type PartEntry, type PartStore } from '../model/part-store.ts';
 
 export type OpenedPart = {

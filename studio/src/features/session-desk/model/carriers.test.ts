@@ -5,7 +5,7 @@ import { quantityPathOf } from '../../../components/fields/measure.ts';
 import { valueAt, withValueAt } from '../../../lib/study-path.ts';
 import { carriedStudy, carrierFor, sessionPartKinds, type PartBody, type SessionPartKind } from './carriers.ts';
 import { studyIssues } from './checked-study.ts';
-import { examples } from './examples.ts';
+import { examples } from '../../../lib/examples.ts';
 
 let studies: SessionStudyInput[];
 beforeAll(async () => {

@@ -1,6 +1,5 @@
 import type { SessionStudyInput } from '@voltiplano/engine';
-import type { Example } from './examples.ts';
-import { examples } from './examples.ts';
+import { examples, type Example } from '../../../lib/examples.ts';
 
 /** Parts of a session study that can be kept, and edited, by themselves. */
 export const sessionPartKinds = ['cell', 'pack', 'thermal', 'inlet', 'station', 'strategy'] as const;
