@@ -27,12 +27,56 @@ const guestPages: RouteObject[] = [
     path: '/sign-in',
     lazy: async () => ({ Component: (await import('../features/sign-in/sign-in-page.tsx')).SignInPage }),
   },
+  {
+    path: '/sign-up',
+    lazy: async () => ({ Component: (await import('../features/sign-in/sign-up-page.tsx')).SignUpPage }),
+  },
+  {
+    path: '/forgot-password',
+    lazy: async () => ({
+      Component: (await import('../features/sign-in/forgot-password-page.tsx')).ForgotPasswordPage,
+    }),
+  },
+  {
+    path: '/reset-password',
+    lazy: async () => ({ Component: (await import('../features/sign-in/reset-password-page.tsx')).ResetPasswordPage }),
+  },
+  {
+    path: '/confirm-email',
+    lazy: async () => ({ Component: (await import('../features/sign-in/confirm-email-page.tsx')).ConfirmEmailPage }),
+  },
+  {
+    path: '/join',
+    lazy: async () => ({ Component: (await import('../features/sign-in/join-page.tsx')).JoinPage }),
+  },
 ];
 
 /** Below `/w/:workspaceId`. */
-const workspacePages: RouteObject[] = [{ index: true, element: <Navigate to="studies" replace /> }];
+const workspacePages: RouteObject[] = [
+  { index: true, element: <Navigate to="studies" replace /> },
+  {
+    path: 'team',
+    lazy: async () => ({ Component: (await import('../features/team/team-page.tsx')).TeamPage }),
+  },
+  {
+    path: 'settings',
+    lazy: async () => ({ Component: (await import('../features/team/settings-page.tsx')).SettingsPage }),
+  },
+  {
+    path: 'activity',
+    lazy: async () => ({ Component: (await import('../features/activity/activity-page.tsx')).ActivityPage }),
+  },
+];
 
 const signedInPages: RouteObject[] = [
+  {
+    path: '/account',
+    lazy: async () => ({ Component: (await import('../features/account/account-page.tsx')).AccountPage }),
+  },
+  {
+    path: '/new-workspace',
+    lazy: async () => ({ Component: (await import('../features/team/new-workspace-page.tsx')).NewWorkspacePage }),
+  },
   {
     path: '/w/:workspaceId',
     lazy: async () => ({ Component: (await import('./workspace-frame.tsx')).WorkspaceFrame }),

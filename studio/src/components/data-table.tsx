@@ -16,6 +16,8 @@ export type Column<Row> = {
   sortBy?: (row: Row) => string | number | null;
   /** Where the server sorts: whether it can by this column. */
   isSortable?: boolean;
+  /** The head is read aloud, not seen: for a column of things to press. */
+  isHeadUnseen?: boolean;
   /** Numbers stand right. */
   isRight?: boolean;
   /** The cell that names the row; read out with every other. */
@@ -114,7 +116,8 @@ type HeadProps<Row> = {
 };
 
 function Head<Row>({ column, sort, isServers, onSort }: HeadProps<Row>) {
-  const { id, head, sortBy, isSortable, width } = column;
+  const { id, sortBy, isSortable, width } = column;
+  const head = column.isHeadUnseen ? <span className="unseen">{column.head}</span> : column.head;
   const isSorted = sort?.by === id;
   const canSort = isServers ? isSortable === true : sortBy !== undefined;
   const order = isSorted ? sort.order : undefined;
@@ -151,8 +154,9 @@ function SortMark({ order }: { order: Sort['order'] | undefined }) {
 }
 
 function Cell<Row>({ column, row }: { column: Column<Row>; row: Row }) {
-  const { head, isName, narrow, cell } = column;
-  const shared = { className: cellClass(column), 'data-head': narrow === 'bare' || isName ? undefined : head };
+  const { head, isName, isHeadUnseen, narrow, cell } = column;
+  const isNamed = !isName && !isHeadUnseen && narrow !== 'bare';
+  const shared = { className: cellClass(column), 'data-head': isNamed ? head : undefined };
   const content = cell(row);
   if (isName) {
     return (

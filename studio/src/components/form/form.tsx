@@ -14,6 +14,8 @@ type Props<V extends FieldValues, C, T> = {
   busy: string;
   /** Whether the button is the one next step of the page. */
   go?: boolean;
+  /** Few short fields and their button in one line, where there is room. */
+  isRow?: boolean;
   /** Stands beside the button. */
   beside?: ReactNode;
   /** Name read aloud, where the page has several forms. */
@@ -23,7 +25,7 @@ type Props<V extends FieldValues, C, T> = {
 
 /** Fields over one button: checked before it is sent, the first wrong field focused, what was typed always kept. */
 export function Form<V extends FieldValues, C, T>(props: Props<V, C, T>) {
-  const { form, send, fieldOfCode, submit, busy, go = true, beside, label, children } = props;
+  const { form, send, fieldOfCode, submit, busy, go = true, isRow, beside, label, children } = props;
   const { formProblem, takeProblem, clear } = useServerErrors(form, fieldOfCode);
   const { isSubmitting } = form.formState;
   const onSubmit = form.handleSubmit(async (values) => {
@@ -36,7 +38,7 @@ export function Form<V extends FieldValues, C, T>(props: Props<V, C, T>) {
   });
   return (
     <form
-      className="form"
+      className={isRow ? 'form row' : 'form'}
       noValidate
       aria-label={label}
       onSubmit={(event) => {

@@ -36,3 +36,6 @@ export function PasswordField({ label, hint, error, autoComplete, registration }
     </FormField>
   );
 }
+
+/** The rule of a new password, said beforehand. */
+export const PASSWORD_RULE = 'At least 10 characters. A few words in a row are easy to keep in mind.';

@@ -1,12 +1,11 @@
 import './landing.css';
 import { useMemo, useState } from 'react';
-import { Link } from 'react-router-dom';
-import { Button } from '../../components/button.tsx';
 import { Caution } from '../../components/caution.tsx';
 import { Notice } from '../../components/notice.tsx';
 import { formatNumber } from '../../lib/format.ts';
 import { useUnits } from '../../lib/units.ts';
 import { HeroCurve } from './components/hero-curve.tsx';
+import { NextSteps } from './components/next-steps.tsx';
 import { LimitLegend } from './components/limit-legend.tsx';
 import { ThreeColumns } from './components/three-columns.tsx';
 import { TrialRulers } from './components/trial-rulers.tsx';
@@ -31,14 +30,7 @@ export function LandingPage() {
             Describe the pack, the cooling, the station and the taper. See which limit holds the current back, minute by
             minute, and how hot the cells get.
           </p>
-          <div className="next">
-            <Button go asChild>
-              <Link to="/try">Open the desk</Link>
-            </Button>
-            <Button asChild>
-              <Link to="/model">Read the model</Link>
-            </Button>
-          </div>
+          <NextSteps />
         </div>
       </section>
       <HeroCurve result={result} ghosts={ghostRuns} />

@@ -1,10 +1,18 @@
-import { QueryClient } from '@tanstack/react-query';
-import { ApiProblem } from './api-problem.ts';
+import { MutationCache, QueryClient } from '@tanstack/react-query';
+import { ApiProblem, isProblem } from './api-problem.ts';
+import { meQuery } from '../session/me-query.ts';
 
 const TRIES = 2;
 
 /** Server data of the page. What the server refuses is not asked again; what did not reach it is. */
-export const queryClient = new QueryClient({
+export const queryClient: QueryClient = new QueryClient({
+  mutationCache: new MutationCache({
+    onError: (error) => {
+      // The role has changed, or the membership has ended: what is offered must follow.
+      if (isProblem(error, 'FORBIDDEN', 'NOT_FOUND'))
+        void queryClient.invalidateQueries({ queryKey: meQuery.queryKey });
+    },
+  }),
   defaultOptions: {
     queries: {
       staleTime: 10_000,

@@ -25,7 +25,20 @@ export const meQuery = queryOptions({
 /** Takes a person as signed in, with nothing left of the one before. */
 export function setMe(client: QueryClient, me: Me): void {
   const before = client.getQueryData<Me | null>(meQuery.queryKey);
-  if (before && before.person.id !== me.person.id) client.clear();
+  if (before && before.person.id !== me.person.id) forgetTheRest(client);
   client.setQueryData(meQuery.queryKey, me);
   sessionEnd.resume();
+}
+
+/** Nobody is signed in any more, by their own doing; nothing of theirs stays in the page's memory. */
+export function setSignedOut(client: QueryClient): void {
+  forgetCsrfToken();
+  client.setQueryData(meQuery.queryKey, null);
+  forgetTheRest(client);
+  sessionEnd.resume();
+}
+
+/** The query of who is signed in stays: the head of the page watches it. */
+function forgetTheRest(client: QueryClient): void {
+  client.removeQueries({ predicate: ({ queryKey }) => queryKey[0] !== meQuery.queryKey[0] });
 }

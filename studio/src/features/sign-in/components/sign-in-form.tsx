@@ -15,7 +15,8 @@ type Props = {
   email?: string;
   /** Stands beside the button. */
   beside?: ReactNode;
-  onSignedIn: (me: Me) => void;
+  /** Told once the person is signed in. */
+  onSignedIn?: (me: Me) => void;
 };
 
 /** E-mail and password. */
@@ -30,7 +31,7 @@ export function SignInForm({ email, beside, onSignedIn }: Props) {
       submit="Sign in"
       busy="Signing in"
       beside={beside}
-      send={async (body) => onSignedIn(await signIn.mutateAsync(body))}
+      send={async (body) => onSignedIn?.(await signIn.mutateAsync(body))}
     >
       <FormField label="E-mail" error={errors.email?.message}>
         <input

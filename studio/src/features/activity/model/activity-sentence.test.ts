@@ -1,0 +1,45 @@
+import { describe, expect, test } from 'vitest';
+import type { Activity } from '../../../../../server/src/contract/workspace.ts';
+import { activitySentence, type Piece } from './activity-sentence.ts';
+
+const W = 'w0000000000000000000000000';
+const deed = (action: string, detail: Record<string, string>, more: Partial<Activity> = {}): Activity => ({
+  id: 'a',
+  at: '2026-06-04T12:00:00.000Z',
+  personId: 'p',
+  personName: 'Rosa Mamani',
+  action,
+  subjectId: 's1',
+  detail,
+  ...more,
+});
+const told = (one: Activity) => activitySentence(W, one);
+const text = (pieces: Piece[]) => pieces.map((piece) => (typeof piece === 'string' ? piece : piece.text)).join('');
+
+describe('activitySentence', () => {
+  test('tells deeds about people without a link', () => {
+    const { pieces } = told(deed('invitation.sent', { email: 'tomas.apaza@puna.example', role: 'engineer' }));
+    expect(pieces).toEqual(['Rosa Mamani ', 'invited tomas.apaza@puna.example as engineer']);
+    expect(
+      text(told(deed('member.roleChanged', { name: 'Tomás Apaza', from: 'analyst', to: 'engineer' })).pieces),
+    ).toBe('Rosa Mamani changed Tomás Apaza from analyst to engineer');
+  });
+
+  test('leads to the study and to the part of the library', () => {
+    const revised = told(
+      deed('study.revised', { number: '26', title: 'Ledge at 36 %', revision: '6', message: 'Ledge down to 200 A' }),
+    );
+    expect(revised.pieces).toContainEqual({ to: `/w/${W}/studies/s1`, text: '26 Ledge at 36 %' });
+    expect(text(revised.pieces)).toBe('Rosa Mamani revised study 26 Ledge at 36 %, revision 6');
+    expect(revised.message).toBe('Ledge down to 200 A');
+    const added = told(deed('library.added', { kind: 'pack', name: 'Vicuña 86', revision: '1' }));
+    expect(added.pieces).toContainEqual({ to: `/w/${W}/library/s1`, text: 'pack Vicuña 86' });
+  });
+
+  test('says so where the account is gone, and names an action it does not know', () => {
+    expect(text(told(deed('member.left', {}, { personName: null })).pieces)).toBe(
+      'Somebody whose account is gone left the workspace',
+    );
+    expect(text(told(deed('study.weighed', {})).pieces)).toBe('Rosa Mamani did study.weighed');
+  });
+});

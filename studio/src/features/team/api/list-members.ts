@@ -1,0 +1,13 @@
+import { useQuery } from '@tanstack/react-query';
+import { workspaceEndpoints } from '../../../../../server/src/contract/workspace.ts';
+import { callApi } from '../../../lib/api/call-api.ts';
+
+export const membersKey = (workspaceId: string) => ['w', workspaceId, 'members'];
+
+/** Members by name. */
+export function useMembers(workspaceId: string) {
+  return useQuery({
+    queryKey: membersKey(workspaceId),
+    queryFn: ({ signal }) => callApi(workspaceEndpoints.listMembers, { params: { workspaceId }, signal }),
+  });
+}
