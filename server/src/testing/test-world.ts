@@ -141,7 +141,8 @@ async function insertCell(
     [1, ''],
     [2, 'Measured'],
   ] as const) {
-    const said = { name: head.name, notes, source: 'Bench', body: JSON.stringify(examplePart('cell')), message: notes };
+    const body = JSON.stringify({ ...examplePart('cell'), name: head.name });
+    const said = { name: head.name, notes, source: 'Bench', body, message: notes };
     await db
       .insertInto('libraryRevisions')
       .values({ itemId: id, revision, ...said, createdAt: now(), createdBy: personId })
