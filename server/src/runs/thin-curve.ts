@@ -1,16 +1,21 @@
 /** A point of a curve over time: minute, and value. */
 export type CurvePoint = [number, number];
 
+/** A share of the peak that no small drawing shows. */
+const UNSEEN = 0.001;
+
 /**
  * Thins a curve to be drawn small. Ends and peak stay, and both sides of a step, the highest steps first; then, again and
- * again, the point that lies farthest from the curve drawn so far is added.
+ * again, the point that lies farthest from the curve drawn so far is added, until none would be seen beside it.
  *
  * @param curve  in order of time; a step is two points of one moment
  * @param most   how many points may stay, 8 or more
  */
 export function thinCurve(curve: readonly CurvePoint[], most: number): CurvePoint[] {
   if (curve.length <= most) return [...curve];
-  const kept = new Set([0, curve.length - 1, peakOf(curve)]);
+  const peak = peakOf(curve);
+  const unseen = UNSEEN * Math.abs(pointAt(curve, peak)[1]);
+  const kept = new Set([0, curve.length - 1, peak]);
   for (const i of stepsOf(curve)) {
     // Steps take half of the points at most: the rest is for the slopes between them.
     if (kept.size > most / 2 - 2) break;
@@ -19,7 +24,7 @@ export function thinCurve(curve: readonly CurvePoint[], most: number): CurvePoin
   const gaps = gapsBetween([...kept].sort((a, b) => a - b)).map((gap) => measure(curve, gap));
   while (kept.size < most) {
     const widest = gaps.reduce((one, other) => (other.off > one.off ? other : one));
-    if (widest.off === 0) break;
+    if (widest.off <= unseen) break;
     kept.add(widest.at);
     const halves: Gap[] = [
       [widest.gap[0], widest.at],
