@@ -8,6 +8,7 @@ import type { Actor, SessionActor } from './actor.ts';
 import { authenticate } from './authenticate.ts';
 import { readIfMatch } from './if-match.ts';
 import { findKeptAnswer, keepAnswer, type KeptAnswer, type KeyedCall } from './kept-answers.ts';
+import { requireShallow } from './nesting.ts';
 import { HttpProblem, invalidField, invalidInput } from './problem.ts';
 import { type RateLimits, rateLimiters } from './rate-limits.ts';
 import { refuseOtherSites, requireCsrfToken, type Site } from './same-site.ts';
@@ -162,6 +163,7 @@ function parseParams({ params }: Endpoint, req: Request): unknown {
 
 function parse(part: string, schema: z.ZodObject | undefined, value: unknown): unknown {
   if (!schema) return undefined;
+  requireShallow(part, value);
   const parsed = schema.safeParse(value);
   if (!parsed.success) throw invalidInput(part, parsed.error);
   return parsed.data;

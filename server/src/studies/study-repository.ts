@@ -81,6 +81,12 @@ export async function getStudy(core: Core, access: WorkspaceAccess, studyId: str
 
 export type StoredStudy = Awaited<ReturnType<typeof getStudy>>;
 
+/** @throws {HttpProblem} `ARCHIVED` */
+export function requireInUse({ archivedAt }: StoredStudy): void {
+  if (archivedAt === null) return;
+  throw new HttpProblem('ARCHIVED', 'The study lies in the archive. Take it out before changing it.');
+}
+
 /** The first content of a study. */
 export type NewStudy = { inputs: StudyFile; words: StudyWords; hash: string; headline: Headline };
 

@@ -3,20 +3,12 @@ import { type Study, studyEndpoints } from '../contract/study.ts';
 import type { Api } from '../http/api.ts';
 import { etagOf } from '../http/if-match.ts';
 import { listRevisions } from './revision-repository.ts';
+import { prepareRevision, readRevision, saveRevision } from './revision-service.ts';
+import { readStudy } from './study-answer.ts';
 import { listStudies } from './study-list.ts';
 import { getStudy } from './study-repository.ts';
-import {
-  copyStudy,
-  createStudy,
-  moveStudy,
-  prepareCopy,
-  prepareRevision,
-  prepareStudy,
-  readRevision,
-  readStudy,
-  saveRevision,
-  writeWorkingCopy,
-} from './study-service.ts';
+import { copyStudy, createStudy, moveStudy, prepareCopy, prepareStudy } from './study-service.ts';
+import { writeWorkingCopy } from './working-copy-service.ts';
 
 /** Studies, their working copies and their revisions. */
 export function studyRoutes(api: Api): void {
