@@ -38,7 +38,10 @@ export type ProblemCode = keyof typeof problemCodes;
 
 export const fieldErrorSchema = z
   .object({
-    path: z.string().meta({ description: 'Part of the request and path of the field: `body.email`, `query.limit`' }),
+    path: z.string().meta({
+      description:
+        'Part of the request and path of the field, rows by number from 0: `body.email`, `body.file.items.3.name`',
+    }),
     message: z.string(),
   })
   .meta({ id: 'FieldError' });

@@ -80,13 +80,15 @@ export async function addRevision(
   access.require('edit-library');
   const { name } = content;
   const revision = item.revision + 1;
-  await insertRevision(core, access, { id: item.id, revision }, content, message);
-  await core.db
+  const changed = { changedAt: core.now(), changedBy: access.actor.personId };
+  const { numUpdatedRows } = await core.db
     .updateTable('libraryItems')
-    .set({ name, sortName: sortText(name), revision, changedAt: core.now(), changedBy: access.actor.personId })
+    .set({ name, sortName: sortText(name), revision, ...changed })
     .where('id', '=', item.id)
     .where('workspaceId', '=', access.workspaceId)
-    .execute();
+    .executeTakeFirstOrThrow();
+  if (numUpdatedRows !== 1n) throw new HttpProblem('NOT_FOUND', 'The library has no such part.');
+  await insertRevision(core, access, { id: item.id, revision }, content, message);
   return getItem(core, access, item.id);
 }
 
