@@ -1,5 +1,5 @@
 import type { SessionStudyInput, StudyIssue } from '@voltiplano/engine';
-import { firstView, type DeskState, type Sheet, type Step } from './desk-state.ts';
+import { deskWith, firstView, type DeskState, type Sheet, type Step } from './desk-state.ts';
 import { studyIssues } from './checked-study.ts';
 
 /** Steps of undo that survive a reload; each holds a whole study. */
@@ -22,9 +22,11 @@ export function readKeptDesk(text: string): ReadDesk {
   if (!isKept(kept)) return { issues: [{ path: '', rule: 'kept', message: 'What this browser kept is no desk' }] };
   const issues = sheetIssues(kept.sheet);
   if (issues.length > 0) return { issues };
-  const past = kept.past.filter((step) => sheetIssues(step.sheet).length === 0);
+  const past = kept.past
+    .filter((step) => sheetIssues(step.sheet).length === 0)
+    .map((step) => ({ ...step, sheet: completed(step.sheet) }));
   return {
-    desk: { sheet: kept.sheet, past, future: [], typingAt: null, view: { ...firstView, ...kept.view } },
+    desk: { ...deskWith(completed(kept.sheet)), past, view: { ...firstView, ...kept.view } },
   };
 }
 
@@ -44,6 +46,11 @@ function isKept(value: unknown): value is Kept {
 function isStep(value: unknown): value is Step {
   const step = value as Partial<Step> | null;
   return typeof step?.label === 'string' && isSheet(step.sheet);
+}
+
+/** Sheets kept before they knew where their parts came from. */
+function completed(sheet: Sheet): Sheet {
+  return { ...sheet, references: sheet.references ?? [] };
 }
 
 function isSheet(value: unknown): value is Sheet {

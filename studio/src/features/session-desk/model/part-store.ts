@@ -1,6 +1,6 @@
 import { partIssues, type SessionStudyInput } from '@voltiplano/engine';
 import { carriedStudy, type PartBody, type SessionPartKind } from './carriers.ts';
-import { deskReducer, firstView, type DeskState, type Sheet } from './desk-state.ts';
+import { deskReducer, deskWith, firstView, type DeskState, type Sheet } from './desk-state.ts';
 import type { DeskStore } from './desk-store.ts';
 import { applied, isReadable, type Draft, type Entry } from './draft.ts';
 
@@ -32,7 +32,7 @@ export function createPartStore(
   const draft = { study: carriedStudy(base, kind, body), pending };
   const baseline = saved && carriedStudy(base, kind, saved);
   const view = { ...firstView, shut: [], unfolded: [kind, 'chiller', 'radiator', 'heater'] };
-  let state: DeskState = { sheet: { draft, baseline }, past: [], future: [], typingAt: null, view };
+  let state: DeskState = { ...deskWith({ draft, references: [], baseline }), view };
   let entry: PartEntry = { body, pending };
   const listeners = new Set<() => void>();
   const set = (next: DeskState) => {
@@ -68,9 +68,10 @@ function onEachSheet(state: DeskState, change: (sheet: Sheet) => Sheet): DeskSta
   return { ...step(state), past: state.past.map(step), future: state.future.map(step) };
 }
 
-function carriedSheet({ draft, baseline }: Sheet, kind: SessionPartKind, base: SessionStudyInput): Sheet {
+function carriedSheet(sheet: Sheet, kind: SessionPartKind, base: SessionStudyInput): Sheet {
+  const { draft, baseline } = sheet;
   const on = (study: SessionStudyInput) => carriedStudy(base, kind, bodyOf(study, kind));
-  return { draft: { ...draft, study: on(draft.study) }, baseline: baseline && on(baseline) };
+  return { ...sheet, draft: { ...draft, study: on(draft.study) }, baseline: baseline && on(baseline) };
 }
 
 /** An entry that only a rule between parts holds back moves in, and the rest of the study gives way. */
