@@ -1,16 +1,18 @@
 import { expect, test as base, type Page } from '@playwright/test';
 
 /** Errors of the page and its console; a journey that leaves any behind has failed. */
-export const test = base.extend<{ quiet: void }>({
+export const test = base.extend<{ expectedErrors: RegExp | null; quiet: void }>({
+  /** What the browser says of calls that a journey means to fail. */
+  expectedErrors: [null, { option: true }],
   quiet: [
-    async ({ page }, use) => {
+    async ({ page, expectedErrors }, use) => {
       const heard: string[] = [];
       page.on('console', (message) => {
         if (message.type() === 'error') heard.push(message.text());
       });
       page.on('pageerror', (error) => heard.push(error.message));
       await use();
-      expect(heard).toEqual([]);
+      expect(heard.filter((line) => !expectedErrors?.test(line))).toEqual([]);
     },
     { auto: true },
   ],

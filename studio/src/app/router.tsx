@@ -66,6 +66,12 @@ const workspacePages: RouteObject[] = [
     path: 'activity',
     lazy: async () => ({ Component: (await import('../features/activity/activity-page.tsx')).ActivityPage }),
   },
+  {
+    path: 'studies/:studyId',
+    lazy: async () => ({
+      Component: (await import('../features/session-desk/study-desk-page.tsx')).StudyDeskPage,
+    }),
+  },
 ];
 
 const signedInPages: RouteObject[] = [

@@ -2,8 +2,12 @@ import '../../lib/zod-without-eval.ts';
 import './session-desk.css';
 import { useEffect, useState } from 'react';
 import { PageTitle } from '../../components/page-title.tsx';
-import { SessionDesk } from './components/session-desk.tsx';
+import { DeskActions } from './components/desk-actions.tsx';
+import { DeskTitleBlock } from './components/desk-title-block.tsx';
+import { SessionDesk, type HeadTools } from './components/session-desk.tsx';
 import { loadDesk, type LoadedDesk } from './hooks/load-desk.ts';
+
+const guestHead = (tools: HeadTools) => <DeskTitleBlock actions={<DeskActions {...tools} />} />;
 
 /** The session desk, without an account: inputs on one side, results on the other, everything kept in this browser. */
 export function SessionDeskPage() {
@@ -25,7 +29,7 @@ export function SessionDeskPage() {
   return (
     <>
       <PageTitle page="Session desk" />
-      {loaded ? <SessionDesk {...loaded} /> : <p className="desk-opening">Opening the desk.</p>}
+      {loaded ? <SessionDesk {...loaded} head={guestHead} /> : <p className="desk-opening">Opening the desk.</p>}
     </>
   );
 }

@@ -1,21 +1,14 @@
-import { useRef, useState, type RefObject } from 'react';
+import { useRef, useState } from 'react';
 import { Button } from '../../../components/button.tsx';
 import { Menu, MenuHeading, MenuItem, MenuRule } from '../../../components/menu.tsx';
 import { useDispatch } from '../hooks/use-desk.ts';
 import type { StudyFiles } from '../hooks/use-study-files.ts';
 import { examples } from '../../../lib/examples.ts';
 import { ExportMenu } from './export-menu.tsx';
-import type { Drawings } from './results-panel.tsx';
-
-type Props = Drawings & {
-  files: StudyFiles;
-  /** The file input, so that a key can open it too. */
-  picker: RefObject<HTMLInputElement | null>;
-  onShowKeys: () => void;
-};
+import type { HeadTools } from './session-desk.tsx';
 
 /** Examples, files, export, and the one next step: keep what is there as baseline. */
-export function DeskActions({ files, picker, stripsRef, ledgerRef, onShowKeys }: Props) {
+export function DeskActions({ files, pickFile, showKeys, stripsRef, ledgerRef }: HeadTools) {
   const dispatch = useDispatch();
   return (
     <>
@@ -29,24 +22,11 @@ export function DeskActions({ files, picker, stripsRef, ledgerRef, onShowKeys }:
           </MenuItem>
         ))}
       </Menu>
-      <StudyMenu files={files} onOpen={() => picker.current?.click()} onShowKeys={onShowKeys} />
+      <StudyMenu files={files} onOpen={pickFile} onShowKeys={showKeys} />
       <ExportMenu stripsRef={stripsRef} ledgerRef={ledgerRef} />
       <Button go onClick={() => dispatch({ type: 'keep-baseline' })}>
         Keep as baseline
       </Button>
-      <input
-        ref={picker}
-        type="file"
-        hidden
-        accept=".json,application/json"
-        aria-label="Study file"
-        onChange={(event) => {
-          const file = event.target.files?.[0];
-          if (file) void files.openFile(file);
-          // The same file can be chosen again.
-          event.target.value = '';
-        }}
-      />
     </>
   );
 }

@@ -35,8 +35,10 @@ export const InputsPanel = memo(function InputsPanel() {
 /** The last change taken back, or made again. */
 export function UndoActions() {
   const dispatch = useDispatch();
+  const readOnly = useDesk((state) => state.readOnly);
   const last = useDesk((state) => state.past.at(-1)?.label);
   const next = useDesk((state) => state.future[0]?.label);
+  if (readOnly) return null;
   return (
     <div className="ins-undo">
       <button

@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { useReadOnly } from '../../../components/fields/read-only.ts';
 import { useDesk, useDispatch } from '../hooks/use-desk.ts';
 import { newParts } from '../model/input-sections.ts';
 import { valueAt } from '../../../lib/study-path.ts';
@@ -21,6 +22,7 @@ type Props = {
 export function OptionalPart({ path, noun, article = 'a', without, goWith = [], children }: Props) {
   const dispatch = useDispatch();
   const present = useDesk(({ sheet }) => valueAt(sheet.draft.study, path) !== undefined);
+  const readOnly = useReadOnly();
   const what = [article, noun].filter(Boolean).join(' ');
   const set = (value: unknown, label: string, others: Part[] = []) =>
     dispatch({ type: 'parts', parts: [{ path, value }, ...others], label });
@@ -28,11 +30,14 @@ export function OptionalPart({ path, noun, article = 'a', without, goWith = [], 
     return (
       <p className="without">
         <span>{without}</span>
-        <button type="button" className="lnk" onClick={() => set(newParts[path], `add ${what}`)}>
-          {`Add ${what}`}
-        </button>
+        {!readOnly && (
+          <button type="button" className="lnk" onClick={() => set(newParts[path], `add ${what}`)}>
+            {`Add ${what}`}
+          </button>
+        )}
       </p>
     );
+  if (readOnly) return children;
   return (
     <>
       {children}

@@ -1,60 +1,81 @@
-import { useEffect, useMemo, useRef, useState } from 'react';
+import { useEffect, useMemo, useRef, useState, type ReactNode, type RefObject } from 'react';
 import { DeskContext } from '../hooks/use-desk.ts';
 import type { LoadedDesk } from '../hooks/load-desk.ts';
 import { RunContext } from '../hooks/run-context.ts';
 import { useDeskRuns } from '../hooks/use-desk-runs.ts';
 import { useDeskShortcuts } from '../hooks/use-desk-shortcuts.ts';
-import { useStudyFiles } from '../hooks/use-study-files.ts';
-import { DeskActions } from './desk-actions.tsx';
-import { DeskTitleBlock } from './desk-title-block.tsx';
+import { useStudyFiles, type StudyFiles } from '../hooks/use-study-files.ts';
 import { InputsPanel } from './inputs-panel.tsx';
 import { OpenReportDialog } from './open-report-dialog.tsx';
 import { ResultsPanel, type Drawings } from './results-panel.tsx';
 import { ShortcutsDialog } from './shortcuts-dialog.tsx';
 
+/** What the head of a desk can do, and the drawings it can export. */
+export type HeadTools = Drawings & { files: StudyFiles; pickFile: () => void; showKeys: () => void };
+
+type Props = LoadedDesk & {
+  /** Title block and actions: a guest's, or those of a study of a workspace. */
+  head: (tools: HeadTools) => ReactNode;
+  /** What Ctrl S does, where it is not saving a file. */
+  onSave?: { does: string; act: () => void };
+  /** Stands in the place of the results while it is there. */
+  instead?: ReactNode;
+};
+
 /** One desk with its study, its results and its files. */
-export function SessionDesk({ store, report }: LoadedDesk) {
+export function SessionDesk({ store, ...props }: Props) {
   const runs = useDeskRuns(store);
   return (
     <DeskContext value={store}>
       <RunContext value={runs}>
-        <Desk store={store} report={report} />
+        <Desk store={store} {...props} />
       </RunContext>
     </DeskContext>
   );
 }
 
 /** Reads nothing of the study or its results itself: each part below is drawn again when what it shows changes. */
-function Desk({ store, report }: LoadedDesk) {
+function Desk({ store, report, head, onSave, instead }: Props) {
   const files = useStudyFiles(store, report);
   const picker = useRef<HTMLInputElement>(null);
   const stripsRef = useRef<HTMLDivElement>(null);
   const ledgerRef = useRef<HTMLDivElement>(null);
   const [showsKeys, setShowsKeys] = useState(false);
-  const { save } = files;
+  const save = onSave?.act ?? files.save;
   const commands = useMemo(
     () => ({ save, open: () => picker.current?.click(), showShortcuts: () => setShowsKeys(true) }),
-    [save],
+    [save, setShowsKeys],
   );
   useDeskShortcuts(store, commands);
   useLinksInTheAddress(files.openLink);
   return (
     <>
-      <DeskTitleBlock
-        actions={
-          <DeskActions
-            files={files}
-            picker={picker}
-            stripsRef={stripsRef}
-            ledgerRef={ledgerRef}
-            onShowKeys={() => setShowsKeys(true)}
-          />
-        }
-      />
-      <DeskSides stripsRef={stripsRef} ledgerRef={ledgerRef} />
-      <ShortcutsDialog open={showsKeys} onOpenChange={setShowsKeys} />
+      {head({ files, pickFile: commands.open, showKeys: commands.showShortcuts, stripsRef, ledgerRef })}
+      <DeskSides stripsRef={stripsRef} ledgerRef={ledgerRef} instead={instead} />
+      <ShortcutsDialog open={showsKeys} onOpenChange={setShowsKeys} saves={onSave?.does} />
       <OpenReportDialog report={files.report} onClose={files.forgetReport} />
+      <FilePicker ref={picker} onFile={(file) => void files.openFile(file)} />
     </>
+  );
+}
+
+type FilePickerProps = { ref: RefObject<HTMLInputElement | null>; onFile: (file: File) => void };
+
+function FilePicker({ ref, onFile }: FilePickerProps) {
+  return (
+    <input
+      ref={ref}
+      type="file"
+      hidden
+      accept=".json,application/json"
+      aria-label="Study file"
+      onChange={(event) => {
+        const file = event.target.files?.[0];
+        if (file) onFile(file);
+        // The same file can be chosen again.
+        event.target.value = '';
+      }}
+    />
   );
 }
 
@@ -64,20 +85,21 @@ const SIDES = [
 ] as const;
 
 /** Inputs and results, beside each other or, on a telephone, one at a time. */
-function DeskSides({ stripsRef, ledgerRef }: Drawings) {
+function DeskSides({ stripsRef, ledgerRef, instead }: Drawings & { instead?: ReactNode }) {
   const [side, setSide] = useState<'results' | 'inputs'>('results');
   return (
     <>
       <div className="phone-switch pick" role="group" aria-label="Part of the desk">
         {SIDES.map((one) => (
           <button key={one.side} type="button" aria-pressed={side === one.side} onClick={() => setSide(one.side)}>
-            {one.label}
+            {one.side === 'results' && instead ? 'History' : one.label}
           </button>
         ))}
       </div>
-      <div className={`desk show-${side}`}>
+      <div className={`desk show-${side}${instead ? ' instead' : ''}`}>
         <InputsPanel />
         <ResultsPanel stripsRef={stripsRef} ledgerRef={ledgerRef} />
+        {instead}
       </div>
     </>
   );

@@ -1,5 +1,6 @@
 import { useMemo } from 'react';
 import { ChoiceField } from '../../../components/fields/choice-field.tsx';
+import { useReadOnly } from '../../../components/fields/read-only.ts';
 import { WordSwitch } from '../../../components/word-switch.tsx';
 import { formatNumber } from '../../../lib/format.ts';
 import { useDesk, useDeskStore, useDispatch } from '../hooks/use-desk.ts';
@@ -57,6 +58,8 @@ function LedgeTable({ path }: { path: string }) {
 /** A taper's unit; choosing another keeps the numbers, and says so. */
 function UnitChoice({ unit }: { unit: TaperUnit }) {
   const dispatch = useDispatch();
+  const readOnly = useReadOnly();
+  if (readOnly) return <p className="note">{`Numbers in ${unit}`}</p>;
   const onChange = (value: TaperUnit) =>
     dispatch({ type: 'parts', parts: [{ path: 'strategy.taper.unit', value }], label: `taper in ${value}` });
   return (
