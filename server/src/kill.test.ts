@@ -28,7 +28,15 @@ afterEach(() => {
 
 async function start(): Promise<{ child: ChildProcess; address: string }> {
   const child = spawn(process.execPath, ['--import', 'tsx', path.join(import.meta.dirname, 'main.ts')], {
-    env: { ...process.env, NODE_ENV: 'test', STUDIO_DIR: dir, DATA_DIR: dir, PORT: '0', LOG_LEVEL: 'silent' },
+    env: {
+      ...process.env,
+      NODE_ENV: 'test',
+      STUDIO_DIR: dir,
+      DATA_DIR: dir,
+      DEMO: 'off',
+      PORT: '0',
+      LOG_LEVEL: 'silent',
+    },
     stdio: ['ignore', 'pipe', 'inherit'],
   });
   running = child;

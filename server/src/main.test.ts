@@ -5,10 +5,13 @@ import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
+import Sqlite from 'better-sqlite3';
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 
 const MAIN = path.join(import.meta.dirname, 'main.ts');
 const START_PATIENCE_MS = 20_000;
+/** The demo team takes some fifty runs of the engine. */
+const DEMO_PATIENCE_MS = 120_000;
 
 let dir: string;
 let running: ChildProcess | undefined;
@@ -28,7 +31,15 @@ afterAll(() => {
 
 function start(env: Record<string, string>) {
   const child = spawn(process.execPath, ['--import', 'tsx', MAIN], {
-    env: { ...process.env, STUDIO_DIR: dir, DATA_DIR: path.join(dir, 'data'), PORT: '0', LOG_LEVEL: 'silent', ...env },
+    env: {
+      ...process.env,
+      STUDIO_DIR: dir,
+      DATA_DIR: path.join(dir, 'data'),
+      DEMO: 'off',
+      PORT: '0',
+      LOG_LEVEL: 'silent',
+      ...env,
+    },
   });
   running = child;
   let stdout = '';
@@ -151,4 +162,74 @@ describe('main', () => {
     },
     START_PATIENCE_MS,
   );
+
+  it(
+    'fills an empty directory with the demo team and prints its accounts, at each start',
+    async () => {
+      const DATA_DIR = path.join(dir, 'demo');
+      const first = start({ DATA_DIR, DEMO: '' });
+      await first.address;
+      await expect.poll(() => first.output().stdout).toMatch(/\n {2}ines@puna\.example +Inés Quispe +owner\n/);
+      const filled = countIn(DATA_DIR);
+      expect(filled).toMatchObject({ people: 4, workspaces: 1, studies: 14 });
+      await ended(first.child, 'SIGTERM');
+      const second = start({ DATA_DIR, DEMO: 'off' });
+      await second.address;
+      await expect.poll(() => second.output().stdout).toMatch(/\n {2}tomas@puna\.example +Tomás Apaza +viewer\n/);
+      expect(countIn(DATA_DIR)).toEqual(filled);
+    },
+    DEMO_PATIENCE_MS,
+  );
+
+  it(
+    'is killed in the middle of that, finds nothing half at the next start, and fills it then',
+    async () => {
+      const DATA_DIR = path.join(dir, 'killed');
+      const first = start({ DATA_DIR, DEMO: 'on', LOG_LEVEL: 'info' });
+      await expect.poll(() => first.output().stdout, { timeout: START_PATIENCE_MS }).toContain('seeding the demo team');
+      await new Promise((resolve) => setTimeout(resolve, 500));
+      await ended(first.child, 'SIGKILL');
+      expect(first.output().stdout).not.toContain('demo team seeded');
+      expect(countIn(DATA_DIR)).toEqual({ people: 0, workspaces: 0, libraryItems: 0, studies: 0, activity: 0 });
+      await start({ DATA_DIR, DEMO: 'on' }).address;
+      expect(countIn(DATA_DIR)).toMatchObject({ people: 4, workspaces: 1, studies: 14 });
+    },
+    DEMO_PATIENCE_MS,
+  );
+
+  it.each([
+    ['development with DEMO=off', { DEMO: 'off' }],
+    [
+      'production',
+      { DEMO: '', NODE_ENV: 'production', PUBLIC_URL: 'https://volt.example', SMTP_URL: 'smtp://127.0.0.1:9' },
+    ],
+  ])(
+    'starts empty in %s',
+    async (_where, env) => {
+      const DATA_DIR = mkdtempSync(path.join(dir, 'empty-'));
+      const { address, output } = start({ ...env, DATA_DIR });
+      await address;
+      expect(countIn(DATA_DIR)).toEqual({ people: 0, workspaces: 0, libraryItems: 0, studies: 0, activity: 0 });
+      expect(output().stdout).not.toContain('puna');
+    },
+    START_PATIENCE_MS,
+  );
 });
+
+async function ended(child: ChildProcess, signal: NodeJS.Signals): Promise<void> {
+  const exit = once(child, 'exit');
+  child.kill(signal);
+  await exit;
+}
+
+/** Rows of some tables in the database of a data directory. */
+function countIn(dataDir: string): Record<string, number> {
+  const db = new Sqlite(path.join(dataDir, 'voltiplano.db'), { readonly: true });
+  try {
+    const tables = ['people', 'workspaces', 'libraryItems', 'studies', 'activity'];
+    const count = (table: string) => db.prepare<[], number>(`SELECT count(*) FROM ${table}`).pluck().get() ?? -1;
+    return Object.fromEntries(tables.map((table) => [table, count(table)]));
+  } finally {
+    db.close();
+  }
+}

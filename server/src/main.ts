@@ -1,6 +1,7 @@
 import { existsSync } from 'node:fs';
 import path from 'node:path';
 import { type Logger, pino } from 'pino';
+import { demoAccountsText } from './demo/demo-accounts.ts';
 import { readSettings, SettingsError } from './settings.ts';
 import { type RunningServer, startServer } from './start-server.ts';
 
@@ -13,10 +14,10 @@ async function main(): Promise<void> {
   }
   const logger = pino({ level: settings.logLevel });
   const running = await startServer(settings, logger);
-  const { address } = running;
+  const { address, demoAccounts } = running;
   process.stdout.write(`\nVoltiplano: ${address}\nThe desk needs no account: ${address}/try\n`);
   if (settings.smtpUrl === null) process.stdout.write(`Mails go nowhere; read them: ${address}/api/v1/dev/mailbox\n`);
-  process.stdout.write('\n');
+  process.stdout.write(`\n${demoAccountsText(demoAccounts)}`);
   closeOnSignal(running, logger);
 }
 

@@ -25,6 +25,8 @@ export type Settings = {
   mailFrom: string;
   /** null: none in production, a local one in development. */
   provider: ProviderSettings | null;
+  /** Whether a directory that holds nobody yet is filled with the demo team. */
+  demo: boolean;
 };
 
 /** A setting that the server cannot start with; the message says which, what is wrong and how to mend it. */
@@ -51,6 +53,7 @@ export function readSettings(env: NodeJS.ProcessEnv): Settings {
     smtpUrl: readSmtpUrl(env.SMTP_URL, isProduction),
     mailFrom: env.MAIL_FROM || 'Voltiplano <voltiplano@localhost>',
     provider: readProvider(env),
+    demo: readDemo(env.DEMO, isProduction),
   };
 }
 
@@ -123,6 +126,13 @@ function readTrustedProxies(text: string | undefined): number {
     throw new SettingsError(`TRUSTED_PROXIES must be the number of reverse proxies, 0 to 9, but it is "${text}".`);
   }
   return Number(text);
+}
+
+/** Accounts whose password is public come into production only where somebody says so. */
+function readDemo(text: string | undefined, isProduction: boolean): boolean {
+  if (!text) return !isProduction;
+  if (text !== 'on' && text !== 'off') throw new SettingsError(`DEMO must be on or off, but it is "${text}".`);
+  return text === 'on';
 }
 
 function readProvider(env: NodeJS.ProcessEnv): ProviderSettings | null {

@@ -5,6 +5,8 @@ import { closeGracefully } from './close-gracefully.ts';
 import type { Core } from './core.ts';
 import { type Db, openDatabase } from './db/database.ts';
 import { migrateToLatest } from './db/migrate.ts';
+import { type DemoAccount, listDemoAccounts } from './demo/demo-accounts.ts';
+import { seedDemo } from './demo/seed-demo.ts';
 import { createApp } from './http/app.ts';
 import { defaultRateLimits } from './http/rate-limits.ts';
 import { listen } from './listen.ts';
@@ -20,6 +22,8 @@ import { databaseFileIn, prepareDataDir, type Settings } from './settings.ts';
 export type RunningServer = {
   /** Where to open it. */
   address: string;
+  /** Accounts that everybody knows the password of. */
+  demoAccounts: DemoAccount[];
   /** Stops taking requests, waits for those under way, and closes everything. Answers whether all were answered. */
   close: (patienceMs: number) => Promise<boolean>;
 };
@@ -54,6 +58,7 @@ async function startOn(
   const publicUrl = () => settings.publicUrl ?? address;
   const core = openCore(db, settings, logger, mailServer, publicUrl);
   stop.push(core.post.close, () => core.runs.close());
+  if (settings.demo) await seedDemo(core);
   const app = createApp({
     studioDir: settings.studioDir,
     version: ownVersion(),
@@ -69,6 +74,7 @@ async function startOn(
   address = `http://localhost:${port}`;
   return {
     address,
+    demoAccounts: await listDemoAccounts(db),
     close: async (patienceMs) => {
       const answeredAll = await closeGracefully(server, patienceMs);
       await stopAll(stop);

@@ -42,7 +42,8 @@ export default defineConfig({
   webServer: {
     command: 'node --import tsx server/src/main.ts',
     cwd: ROOT,
-    env: { PORT: process.env.E2E_PORT, DATA_DIR: process.env.E2E_DATA_DIR, LOG_LEVEL: 'warn' },
+    // Journeys begin with nobody there: each makes the people that it needs.
+    env: { PORT: process.env.E2E_PORT, DATA_DIR: process.env.E2E_DATA_DIR, LOG_LEVEL: 'warn', DEMO: 'off' },
     url: `${address}/api/health`,
     reuseExistingServer: false,
     gracefulShutdown: { signal: 'SIGTERM', timeout: 5000 },
