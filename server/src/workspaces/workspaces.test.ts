@@ -62,7 +62,12 @@ describe('an invitation', () => {
       .where('email', '=', email)
       .executeTakeFirstOrThrow();
     expect(row.emailProvenAt).toBe(server.clock.now);
-    expect(await actionsIn(guest, params)).toEqual(['member.joined', 'invitation.sent', 'workspace.created']);
+    expect(await actionsIn(guest, params)).toEqual([
+      'member.joined',
+      'invitation.sent',
+      'study.created',
+      'workspace.created',
+    ]);
   });
 
   it('is accepted by who has an account, who then belongs to two workspaces', async () => {
@@ -217,11 +222,11 @@ describe('the activity log', () => {
         items: Activity[];
         nextCursor: string | null;
       };
-      seen.push(...page.items.map(({ detail }) => detail.to ?? 'created'));
+      seen.push(...page.items.map(({ action, detail }) => detail.to ?? action));
       cursor = page.nextCursor;
       await owner.call(workspaces.renameWorkspace, { params, body: { name: 'Z' } });
     } while (cursor);
-    expect(seen).toEqual(['D', 'C', 'B', 'A', 'created']);
+    expect(seen).toEqual(['D', 'C', 'B', 'A', 'study.created', 'workspace.created']);
   });
 
   it.each([{ cursor: 'made-up' }, { limit: '0' }, { limit: '201' }])('refuses %j', async (query) => {
