@@ -12,7 +12,7 @@ export default defineConfig({
         test: {
           name: 'engine',
           environment: 'node',
-          include: ['engine/{src,worker,cli,bench}/**/*.test.ts'],
+          include: ['engine/{src,worker,cli,bench}/**/*.test.ts', 'examples/**/*.test.ts'],
           setupFiles,
           testTimeout: 20_000,
         },
