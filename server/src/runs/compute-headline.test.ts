@@ -1,9 +1,9 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import path from 'node:path';
-import { parseSessionStudy, parseStudy, runStudy, simulateSession, type TripStudyInput } from '@voltiplano/engine';
+import { parseSessionStudy, parseStudy, runStudy, simulateSession } from '@voltiplano/engine';
 import { describe, expect, it } from 'vitest';
 import { headlineSchema } from '../contract/study.ts';
-import { exampleStudy } from '../testing/example-study.ts';
+import { exampleStudy, exampleTrip } from '../testing/example-study.ts';
 import { computeHeadline } from './compute-headline.ts';
 
 const EXAMPLES = path.join(import.meta.dirname, '../../../examples');
@@ -47,7 +47,7 @@ describe('computeHeadline', () => {
   });
 
   it('has of a trip what a trip has', () => {
-    const study = read('vicuna-one-leg.json') as TripStudyInput;
+    const study = exampleTrip();
     const result = runStudy(parseStudy(study));
     if (result.kind !== 'trip') throw new Error('The example is no trip.');
     const { numbers, section } = computeHeadline(study, '0.1.0');
@@ -64,7 +64,7 @@ describe('computeHeadline', () => {
   });
 
   it('says in the engine’s words why there are no numbers', () => {
-    const trip = read('vicuna-one-leg.json') as TripStudyInput;
+    const trip = exampleTrip();
     const leg = trip.trip.legs[0]!;
     const twice = { ...trip, trip: { ...trip.trip, legs: [leg, leg] } };
     expect(computeHeadline(twice, '0.1.0')).toEqual({

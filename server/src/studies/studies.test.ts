@@ -2,7 +2,7 @@ import { parseSessionStudy, simulateSession } from '@voltiplano/engine';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { workspaceEndpoints } from '../contract/workspace.ts';
 import { engineVersion } from '../runs/headline-runs.ts';
-import { exampleStudy } from '../testing/example-study.ts';
+import { exampleStudy, exampleTrip } from '../testing/example-study.ts';
 import { StudyCalls } from '../testing/study-calls.ts';
 import { startTestServer, type TestServer } from '../testing/test-server.ts';
 import { makeWorld, type TestWorld } from '../testing/test-world.ts';
@@ -196,7 +196,7 @@ describe('writeWorkingCopy', () => {
 
   it('keeps the kind of the study, and takes nothing that the engine does not', async () => {
     const id = await begin();
-    const trip = await analyst.write(id, 1, { inputs: exampleStudy('vicuna-one-leg') });
+    const trip = await analyst.write(id, 1, { inputs: exampleTrip() });
     expect(trip.body).toMatchObject({ status: 422, errors: [{ path: 'body.inputs.kind' }] });
     expect(trip.body.detail).toContain('must be "session", but is "trip"');
     const wrong = await analyst.write(id, 1, { inputs: { ...warm, cell: { ...warm.cell, capacityAh: 'much' } } });
