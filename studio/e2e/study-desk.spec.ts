@@ -215,3 +215,77 @@ test('a study in the archive is read only until it is taken out', async ({ page 
   await page.getByRole('menuitem', { name: 'Take out of the archive' }).click();
   await expect(current(page)).not.toHaveAttribute('readonly');
 });
+
+test.describe('parts of the library', () => {
+  type Item = { id: string; revision: number };
+  const stationGroup = (page: Page) => page.getByRole('group', { name: 'Station', exact: true });
+
+  async function withStation(page: Page) {
+    const team = await signUp(page, 'Inés Quispe');
+    const inputs = exampleStudy();
+    const { station } = inputs;
+    const library = `/workspaces/${team.workspaceId}/library`;
+    const common = { name: 'Salar Tola 500 A', notes: '', source: 'invented' };
+    const item = await call<Item>(caller(page), 'post', library, { body: { kind: 'station', ...common, body: station! } });
+    const parts = [{ part: 'station', itemId: item.id, revision: 1 }];
+    const { id } = await makeStudy(page, team, inputs, parts);
+    const revise = (currentMaxA: number) =>
+      call<Item>(caller(page), 'post', `${library}/${item.id}/revisions`, {
+        body: { ...common, body: { ...station, currentMaxA }, message: 'Cable rated anew' },
+        ifMatch: '"r1"',
+      });
+    return { team, id, revise };
+  }
+
+  test('a newer revision is offered; taking it is one step of undo, and keeping the older is remembered', async ({
+    page,
+  }) => {
+    const { team, id, revise } = await withStation(page);
+    await revise(400);
+    await openStudy(page, team, id);
+    const station = stationGroup(page);
+    await expect(station).toContainText('Salar Tola 500 A, revision 1');
+    await station.getByRole('button', { name: 'Take revision 2 of Salar Tola 500 A' }).click();
+    await expect(current(page)).toHaveValue('400');
+    await expect(station).toContainText('Salar Tola 500 A, revision 2');
+    await expect(station).not.toContainText('exists');
+    await page.getByRole('button', { name: /^Undo take Salar Tola/ }).click();
+    await expect(current(page)).toHaveValue('500');
+    await expect(station).toContainText('Revision 2 exists');
+    await station.getByRole('button', { name: 'Keep revision 1 of Salar Tola 500 A' }).click();
+    await expect(station).not.toContainText('exists');
+    await expect(kept(page)).toContainText('just now');
+    await page.reload();
+    await expect(station).toContainText('Salar Tola 500 A, revision 1');
+    await expect(station).not.toContainText('exists');
+  });
+
+  test('a part changed here is saved as a revision, and another is chosen by name', async ({ page }) => {
+    const { team, id } = await withStation(page);
+    await openStudy(page, team, id);
+    const station = stationGroup(page);
+    await current(page).fill('420');
+    await expect(station).toContainText('Salar Tola 500 A, revision 1, changed here');
+    await station.getByRole('button', { name: 'Save to the library: station' }).click();
+    const saving = page.getByRole('dialog', { name: 'Save to the library: station' });
+    await saving.getByRole('textbox', { name: 'What changed' }).fill('Cable measured');
+    await saving.getByRole('button', { name: 'Save the revision' }).click();
+    await expect(station).toContainText('Salar Tola 500 A, revision 2');
+    await expect(station).not.toContainText('changed here');
+
+    await current(page).fill('300');
+    await station.getByRole('button', { name: 'Save to the library: station' }).click();
+    await saving.getByRole('radio', { name: 'a part of its own' }).click();
+    await saving.getByRole('textbox', { name: 'Name' }).fill('Salar Ocaso 300 A');
+    await saving.getByRole('button', { name: 'Add to the library' }).click();
+    await expect(station).toContainText('Salar Ocaso 300 A, revision 1');
+
+    await station.getByRole('button', { name: 'From the library: station' }).click();
+    const picker = page.getByRole('dialog', { name: 'From the library: station' });
+    await picker.getByRole('searchbox', { name: 'Find' }).fill('tola');
+    await expect(picker.getByRole('button', { name: /^Salar Ocaso/ })).toHaveCount(0);
+    await picker.getByRole('button', { name: /^Salar Tola 500 A/ }).click();
+    await expect(current(page)).toHaveValue('420');
+    await expect(station).toContainText('Salar Tola 500 A, revision 2');
+  });
+});

@@ -1,6 +1,5 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import { useQuery, useQueryClient } from '@tanstack/react-query';
-import { useRef } from 'react';
 import { useForm } from 'react-hook-form';
 import { AsyncView } from '../../../components/async-view.tsx';
 import { Dialog } from '../../../components/dialog.tsx';
@@ -17,6 +16,7 @@ import { revisionQuery, revisionsQuery } from '../api/revision-queries.ts';
 import { revisionMessage, saveRevision } from '../api/save-revision.ts';
 import { setStudy, studyQuery } from '../api/study-query.ts';
 import { useStudy, useStudyDesk } from '../hooks/study-desk-context.ts';
+import { useWishKey } from '../hooks/use-wish-key.ts';
 import type { DeskStore } from '../model/desk-store.ts';
 
 type Props = { store: DeskStore; open: boolean; onOpenChange: (open: boolean) => void };
@@ -107,11 +107,7 @@ function MessageForm({ onSaved }: { onSaved: () => void }) {
 function useSaveRevision() {
   const { place, saver } = useStudyDesk();
   const client = useQueryClient();
-  const wish = useRef({ says: '', key: '' });
-  const keyOf = (says: string) => {
-    if (wish.current.says !== says) wish.current = { says, key: crypto.randomUUID() };
-    return wish.current.key;
-  };
+  const keyOf = useWishKey();
   return async (message: string) => {
     try {
       const study = await saver.alone((version) =>

@@ -2,14 +2,17 @@ import type { ReactNode } from 'react';
 import { Section } from '../../../components/section.tsx';
 import { useDesk, useDispatch } from '../hooks/use-desk.ts';
 import { changesOf, issuesOf } from '../model/derived.ts';
+import { partOfSection } from '../model/library-parts.ts';
 import { sections, sectionSummary, type SectionName } from '../model/input-sections.ts';
 import { isWithin } from '../../../lib/study-path.ts';
+import { PartOrigin } from './part-origin.tsx';
 
 type Props = { name: SectionName; children: ReactNode };
 
 /** One part of the inputs with its place in the chain; shut, it says what it holds and whether something needs mending. */
 export function SectionFrame({ name, children }: Props) {
   const { title, side, covers } = sections[name];
+  const part = partOfSection[name];
   const dispatch = useDispatch();
   const shut = useDesk((state) => state.view.shut);
   const summary = useDesk((state) => sectionSummary(name, state.sheet.draft.study));
@@ -35,6 +38,7 @@ export function SectionFrame({ name, children }: Props) {
           </>
         }
       >
+        {part && <PartOrigin part={part} />}
         {children}
       </Section>
     </div>
