@@ -241,7 +241,7 @@ export const libraryEndpoints = {
     access: 'edit-library',
     params: inWorkspace,
     body: z.object({
-      file: libraryFileSchema.extend({ items: z.array(libraryFileItemSchema).min(1).max(500) }),
+      file: libraryFileSchema.extend({ items: z.array(libraryFileItemSchema).min(1).max(2000) }),
       sameName: z.enum(['revise', 'add', 'skip']).default('revise').meta({
         description: 'Where a part of the same kind and name is there: save a revision of it, add another, or leave it',
       }),
