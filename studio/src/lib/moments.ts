@@ -3,6 +3,17 @@ const DAY_MS = 24 * 3_600_000;
 const clock = new Intl.DateTimeFormat(undefined, { hour: '2-digit', minute: '2-digit', hourCycle: 'h23' });
 const dayOfYear = new Intl.DateTimeFormat(undefined, { day: 'numeric', month: 'long' });
 const wholeDay = new Intl.DateTimeFormat(undefined, { day: 'numeric', month: 'long', year: 'numeric' });
+const wholeMoment = new Intl.DateTimeFormat(undefined, {
+  weekday: 'long',
+  day: 'numeric',
+  month: 'long',
+  year: 'numeric',
+  hour: '2-digit',
+  minute: '2-digit',
+  second: '2-digit',
+  hourCycle: 'h23',
+  timeZoneName: 'short',
+});
 
 /** "14:05", by the reader's clock. */
 export function formatClockTime(moment: string): string {
@@ -25,6 +36,11 @@ export function formatAgo(moment: string, now = new Date()): string {
   if (minutes < 60) return `${minutes} min ago`;
   const day = formatDay(moment, now);
   return day === 'today' ? `today ${formatClockTime(moment)}` : day;
+}
+
+/** The moment to the second: "Wednesday, 3 June 2026 at 11:40:12 CEST". */
+export function formatWholeMoment(moment: string): string {
+  return wholeMoment.format(new Date(moment));
 }
 
 function startOfDay(date: Date): number {
