@@ -1,4 +1,5 @@
 import { Dialog } from '../../../components/dialog.tsx';
+import { IssueTable } from '../../../components/issue-table.tsx';
 import type { OpenReport } from '../hooks/open-linked-study.ts';
 
 type Props = { report: OpenReport | null; onClose: () => void };
@@ -12,27 +13,7 @@ export function OpenReportDialog({ report, onClose }: Props) {
       open={report !== null}
       onOpenChange={(open) => !open && onClose()}
     >
-      <table className="issues">
-        <thead>
-          <tr>
-            <th scope="col">Where</th>
-            <th scope="col">What</th>
-            <th scope="col">Value</th>
-          </tr>
-        </thead>
-        <tbody>
-          {report?.issues.map(({ path, rule, value, message }) => (
-            <tr key={`${path} ${rule} ${message}`}>
-              <td className="num">{path || 'file'}</td>
-              <td>
-                {message}
-                <span className="rule">{rule}</span>
-              </td>
-              <td className="num">{value ?? ''}</td>
-            </tr>
-          ))}
-        </tbody>
-      </table>
+      <IssueTable issues={report?.issues ?? []} />
     </Dialog>
   );
 }
