@@ -72,6 +72,14 @@ const workspacePages: RouteObject[] = [
       Component: (await import('../features/session-desk/study-desk-page.tsx')).StudyDeskPage,
     }),
   },
+  {
+    path: 'studies',
+    lazy: async () => ({ Component: (await import('../features/studies/studies-page.tsx')).StudiesPage }),
+  },
+  {
+    path: 'studies/new',
+    lazy: async () => ({ Component: (await import('../features/studies/new-study-page.tsx')).NewStudyPage }),
+  },
 ];
 
 const signedInPages: RouteObject[] = [

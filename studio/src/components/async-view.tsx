@@ -7,6 +7,8 @@ type Props<T> = {
   query: Pick<UseQueryResult<T>, 'data' | 'error' | 'isFetching' | 'refetch'>;
   /** Said while nothing is here yet, such as "Reading the members". */
   loading?: string;
+  /** Takes the room of what is on the way, so that nothing jumps when it comes. */
+  skeleton?: ReactNode;
   /** Whether what came holds nothing to show. */
   isEmpty?: (data: T) => boolean;
   /** Shown in place of nothing: what to do next. */
@@ -15,7 +17,7 @@ type Props<T> = {
 };
 
 /** Server data in each of its states: on the way, failed with a way to try again, empty, here. */
-export function AsyncView<T>({ query, loading = 'Reading', isEmpty, empty, children }: Props<T>) {
+export function AsyncView<T>({ query, loading = 'Reading', skeleton, isEmpty, empty, children }: Props<T>) {
   const { data, error, isFetching, refetch } = query;
   const again = (
     <button className="lnk" disabled={isFetching} onClick={() => void refetch()}>
@@ -30,9 +32,12 @@ export function AsyncView<T>({ query, loading = 'Reading', isEmpty, empty, child
   if (data === undefined) {
     return (
       failed || (
-        <p className="awaited" role="status">
-          {loading}
-        </p>
+        <>
+          <p className={skeleton ? 'unseen' : 'awaited'} role="status">
+            {loading}
+          </p>
+          {skeleton}
+        </>
       )
     );
   }

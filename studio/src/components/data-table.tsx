@@ -26,6 +26,8 @@ export type Column<Row> = {
   width?: string;
   /** On a narrow sheet: left out, or without the head's word before it. */
   narrow?: 'hidden' | 'bare';
+  /** Class of its head and its cells. */
+  className?: string;
 };
 
 /** Column and direction that rows stand in. */
@@ -172,7 +174,7 @@ function Cell<Row>({ column, row }: { column: Column<Row>; row: Row }) {
   );
 }
 
-function cellClass<Row>({ isRight, narrow }: Column<Row>): string | undefined {
-  const names = [isRight ? 'r' : '', narrow === 'hidden' ? 'wide' : ''].filter(Boolean);
+function cellClass<Row>({ isRight, narrow, className }: Column<Row>): string | undefined {
+  const names = [isRight ? 'r' : '', narrow === 'hidden' ? 'wide' : '', className].filter(Boolean);
   return names.length > 0 ? names.join(' ') : undefined;
 }
