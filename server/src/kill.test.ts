@@ -1,4 +1,4 @@
-import { type ChildProcess, spawn } from 'node:child_process';
+import type { ChildProcess } from 'node:child_process';
 import { once } from 'node:events';
 import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
@@ -9,6 +9,7 @@ import { accountEndpoints as account } from './contract/account.ts';
 import { libraryEndpoints as library } from './contract/library.ts';
 import { workspaceEndpoints as workspaces } from './contract/workspace.ts';
 import { examplePart } from './testing/example-parts.ts';
+import { type ServerProcess, startServerProcess, untilKilled } from './testing/server-process.ts';
 import { TestBrowser } from './testing/test-browser.ts';
 
 const PATIENCE_MS = 60_000;
@@ -26,32 +27,10 @@ afterEach(() => {
   rmSync(dir, { recursive: true });
 });
 
-async function start(): Promise<{ child: ChildProcess; address: string }> {
-  const child = spawn(process.execPath, ['--import', 'tsx', path.join(import.meta.dirname, 'main.ts')], {
-    env: {
-      ...process.env,
-      NODE_ENV: 'test',
-      STUDIO_DIR: dir,
-      DATA_DIR: dir,
-      DEMO: 'off',
-      PORT: '0',
-      LOG_LEVEL: 'silent',
-    },
-    stdio: ['ignore', 'pipe', 'inherit'],
-  });
-  running = child;
-  let stdout = '';
-  const address = await new Promise<string>((resolve, reject) => {
-    child.stdout.on('data', (chunk: Buffer) => {
-      stdout += chunk.toString();
-      const found = /Voltiplano: (http:\S+)\n/.exec(stdout)?.[1];
-      if (found) resolve(found);
-    });
-    child.once('exit', () => {
-      reject(new Error(`The server did not start: ${stdout}`));
-    });
-  });
-  return { child, address };
+async function start(): Promise<ServerProcess> {
+  const started = await startServerProcess(dir);
+  running = started.child;
+  return started;
 }
 
 /** What was acknowledged: ids of workspaces, and revisions of cells as `<id> r<revision>`. */
@@ -80,18 +59,6 @@ async function reviseCell(browser: TestBrowser, workspaceId: string, { revisions
     revision = answer.body.revision as number;
     revisions.push(`${at.itemId} r${revision}`);
   });
-}
-
-async function untilKilled(write: () => Promise<void>): Promise<void> {
-  for (;;) {
-    try {
-      await write();
-    } catch (error) {
-      // fetch rejects with a TypeError when the connection breaks; anything else is a fault of the test.
-      if (error instanceof TypeError) return;
-      throw error;
-    }
-  }
 }
 
 describe('kill -9 in the middle of writes', () => {
