@@ -138,7 +138,7 @@ describe('importLibrary', () => {
     ['body.file.format', { ...fileOf([part('pack', 'A')]), format: 'voltiplano/study' }],
     ['body.file.version', { ...fileOf([part('pack', 'A')]), version: 2 }],
     ['body.file.items', fileOf([])],
-    ['body.file.items', fileOf(Array.from({ length: 501 }, () => part('pack', 'A')))],
+    ['body.file.items', fileOf(Array.from({ length: 2001 }, () => part('pack', 'A')))],
     ['body.file.items.0.kind', fileOf([{ ...part('pack', 'A'), kind: 'boost' as never }])],
     ['body.file.items.0.name', fileOf([{ ...part('pack', 'A'), name: ' ' }])],
   ])('refuses a wrong %s', async (path, file) => {
