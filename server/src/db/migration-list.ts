@@ -4,6 +4,7 @@ import { keptAnswers } from '../../../migrations/0003-kept-answers.ts';
 import { outbox } from '../../../migrations/0004-outbox.ts';
 import { library } from '../../../migrations/0005-library.ts';
 import { studies } from '../../../migrations/0006-studies.ts';
+import { studyRevisionsFollow } from '../../../migrations/0007-study-revisions-follow.ts';
 import type { Migration } from './migration.ts';
 
 /** Every migration by its name. Names sort in the order in which they are applied; one that has landed never changes. */
@@ -14,4 +15,5 @@ export const migrations: Record<string, Migration> = {
   '0004-outbox': outbox,
   '0005-library': library,
   '0006-studies': studies,
+  '0007-study-revisions-follow': studyRevisionsFollow,
 };

@@ -133,8 +133,16 @@ describe('revisions of a study', () => {
       const update = sql.raw(`UPDATE studyRevisions SET ${change} WHERE studyId = '${id}'`).execute(db);
       await expect(update, change).rejects.toThrow('a revision of a study never changes');
     }
-    const removal = sql.raw(`DELETE FROM studyRevisions WHERE studyId = '${id}'`).execute(db);
-    await expect(removal).rejects.toThrow('a revision of a study is never deleted');
+    const columns = 'studyId, revision, message, createdAt, title, engineVersion, headline, parts, inputs';
+    const values = (revision: number) => `'${id}', ${revision}, 'Other', 0, '', '', '{}', '[]', '{}'`;
+    for (const [statement, reason] of [
+      [`DELETE FROM studyRevisions WHERE studyId = '${id}'`, 'a revision of a study is never deleted'],
+      [`DELETE FROM studies WHERE id = '${id}'`, 'a study is archived, never deleted'],
+      [`REPLACE INTO studyRevisions (${columns}) VALUES (${values(1)})`, 'revisions of a study follow each other'],
+      [`INSERT INTO studyRevisions (${columns}) VALUES (${values(3)})`, 'revisions of a study follow each other'],
+    ] as const) {
+      await expect(sql.raw(statement).execute(db), statement).rejects.toThrow(reason);
+    }
     expect((await analyst.revision(id, 1)).body).toMatchObject({ message: 'Created', inputs: warm });
   });
 
