@@ -1,4 +1,3 @@
-import { useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import type { Person } from '../../../server/src/contract/account.ts';
@@ -12,7 +11,6 @@ import { SignInForm } from '../features/sign-in/components/sign-in-form.tsx';
  * looked at again: who is signed in is then asked anew.
  */
 export function SessionEndDialog({ person }: { person: Person }) {
-  const client = useQueryClient();
   const [isPutOff, setPutOff] = useState(false);
   if (isPutOff) {
     return (
@@ -33,7 +31,7 @@ export function SessionEndDialog({ person }: { person: Person }) {
       open
       onOpenChange={() => setPutOff(true)}
     >
-      {person.hasPassword && <SignInForm email={person.email} onSignedIn={() => void client.invalidateQueries()} />}
+      {person.hasPassword && <SignInForm email={person.email} />}
       <div className="form-actions mt-[16px]">
         <ProviderButton next="/" isApart />
         <Button asChild>

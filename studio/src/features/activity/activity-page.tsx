@@ -22,7 +22,7 @@ export function ActivityPage() {
     <div className="page activity">
       <PageTitle page={`Activity in ${workspaceName}`}>Activity</PageTitle>
       <AsyncView query={shown} loading="Reading the activity">
-        {({ pages }) => <Days deeds={pages.flatMap(({ items }) => items)} />}
+        {({ pages }) => <Days deeds={pages.flatMap(({ items }) => items)} now={query.dataUpdatedAt} />}
       </AsyncView>
       {isFetchNextPageError && <Notice kind="stop">{problemSentence(error)}</Notice>}
       {hasNextPage && (
@@ -34,8 +34,8 @@ export function ActivityPage() {
   );
 }
 
-function Days({ deeds }: { deeds: Activity[] }) {
-  return byDay(deeds).map(({ day, deeds: ofDay }) => (
+function Days({ deeds, now }: { deeds: Activity[]; now: number }) {
+  return byDay(deeds, now).map(({ day, deeds: ofDay }) => (
     <section key={day} className="page-part" aria-label={day}>
       <h2>{day.charAt(0).toUpperCase() + day.slice(1)}</h2>
       <ol>

@@ -58,7 +58,10 @@ async function send<E extends Endpoint>(endpoint: E, options: CallOptions<E>): P
     ...(keepalive ? { keepalive } : {}),
   };
   const response = await reach(addressOf(endpoint, options), init);
-  if (response.ok) return (response.status === 204 ? undefined : await readJson(response)) as AnswerOf<E>;
+  if (response.ok) {
+    const isEmpty = endpoint.answer === undefined && response.status === endpoint.status;
+    return (isEmpty ? undefined : await readJson(response)) as AnswerOf<E>;
+  }
   throw new ApiProblem((await readJson(response)) as Problem, retryAfterOf(response));
 }
 
@@ -79,10 +82,7 @@ async function reach(address: string, init: RequestInit): Promise<Response> {
 
 async function readJson(response: Response): Promise<unknown> {
   const isJson = response.headers.get('content-type')?.includes('json') === true;
-  if (!isJson) {
-    if (response.ok && response.headers.get('content-length') === '0') return undefined;
-    throw new Unreachable(`An answer that is not the server’s (${response.status})`);
-  }
+  if (!isJson) throw new Unreachable(`An answer that is not the server’s (${response.status})`);
   try {
     return await response.json();
   } catch (cause) {

@@ -1,6 +1,7 @@
 import { MutationCache, QueryClient } from '@tanstack/react-query';
 import { ApiProblem, isProblem } from './api-problem.ts';
 import { meQuery } from '../session/me-query.ts';
+import { sessionEnd } from './session-end.ts';
 
 const TRIES = 2;
 
@@ -20,4 +21,10 @@ export const queryClient: QueryClient = new QueryClient({
     },
     mutations: { retry: false },
   },
+});
+
+// Signed in again, here or in another tab: what failed meanwhile is asked anew.
+sessionEnd.subscribe(() => {
+  if (sessionEnd.get()) return;
+  void queryClient.invalidateQueries({ predicate: ({ queryKey }) => queryKey[0] !== meQuery.queryKey[0] });
 });

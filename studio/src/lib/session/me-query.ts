@@ -26,14 +26,14 @@ export const meQuery = queryOptions({
 export function setMe(client: QueryClient, me: Me): void {
   const before = client.getQueryData<Me | null>(meQuery.queryKey);
   if (before && before.person.id !== me.person.id) forgetTheRest(client);
-  client.setQueryData(meQuery.queryKey, me);
+  take(client, me);
   sessionEnd.resume();
 }
 
 /** Nobody is signed in any more, by their own doing; nothing of theirs stays in the page's memory. */
 export function setSignedOut(client: QueryClient): void {
   forgetCsrfToken();
-  client.setQueryData(meQuery.queryKey, null);
+  take(client, null);
   forgetTheRest(client);
   sessionEnd.resume();
 }
@@ -41,4 +41,10 @@ export function setSignedOut(client: QueryClient): void {
 /** The query of who is signed in stays: the head of the page watches it. */
 function forgetTheRest(client: QueryClient): void {
   client.removeQueries({ predicate: ({ queryKey }) => queryKey[0] !== meQuery.queryKey[0] });
+}
+
+/** An answer still on its way is older than this. */
+function take(client: QueryClient, me: Me | null): void {
+  void client.cancelQueries({ queryKey: meQuery.queryKey });
+  client.setQueryData(meQuery.queryKey, me);
 }

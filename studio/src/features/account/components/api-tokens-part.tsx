@@ -4,7 +4,8 @@ import type { ApiToken } from '../../../../../server/src/contract/api-token.ts';
 import { AsyncView } from '../../../components/async-view.tsx';
 import { ConfirmDialog } from '../../../components/confirm.tsx';
 import { type Column, DataTable } from '../../../components/data-table.tsx';
-import { formatAgo, formatDay } from '../../../lib/moments.ts';
+import { Moment } from '../../../components/moment.tsx';
+import { formatDay } from '../../../lib/moments.ts';
 import { lastWorkspace, workspaceToOpen } from '../../../lib/session/last-workspace.ts';
 import { useApiTokens } from '../api/list-api-tokens.ts';
 import { useRevokeApiToken } from '../api/revoke-api-token.ts';
@@ -86,7 +87,7 @@ function columnsFor(workspaceId: string, myId: string): Column<ApiToken>[] {
     {
       id: 'used',
       head: 'Last used',
-      cell: ({ lastUsedAt }) => (lastUsedAt ? formatAgo(lastUsedAt) : 'not yet'),
+      cell: ({ lastUsedAt }) => (lastUsedAt ? <Moment at={lastUsedAt} /> : 'not yet'),
     },
     {
       id: 'expires',

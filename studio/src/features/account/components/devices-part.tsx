@@ -4,7 +4,8 @@ import { Button } from '../../../components/button.tsx';
 import { ConfirmDialog } from '../../../components/confirm.tsx';
 import { type Column, DataTable } from '../../../components/data-table.tsx';
 import { toast } from '../../../components/toasts.tsx';
-import { formatAgo, formatDay } from '../../../lib/moments.ts';
+import { Moment } from '../../../components/moment.tsx';
+import { formatDay } from '../../../lib/moments.ts';
 import { useDevices } from '../api/list-devices.ts';
 import { useSignOutDevice } from '../api/sign-out-device.ts';
 import { useSignOutEverywhere } from '../api/sign-out-everywhere.ts';
@@ -22,7 +23,7 @@ const columns: Column<Device>[] = [
       </>
     ),
   },
-  { id: 'used', head: 'Last used', cell: ({ lastUsedAt }) => formatAgo(lastUsedAt) },
+  { id: 'used', head: 'Last used', cell: ({ lastUsedAt }) => <Moment at={lastUsedAt} /> },
   { id: 'since', head: 'Signed in', cell: ({ signedInAt }) => formatDay(signedInAt) },
   {
     id: 'act',

@@ -2,7 +2,7 @@ import { zodResolver } from '@hookform/resolvers/zod';
 import type { ReactNode } from 'react';
 import { useForm } from 'react-hook-form';
 import { z } from 'zod';
-import { accountEndpoints, type Me } from '../../../../../server/src/contract/account.ts';
+import { accountEndpoints } from '../../../../../server/src/contract/account.ts';
 import { FormField } from '../../../components/form/form-field.tsx';
 import { Form } from '../../../components/form/form.tsx';
 import { PasswordField } from '../../../components/form/password-field.tsx';
@@ -15,12 +15,10 @@ type Props = {
   email?: string;
   /** Stands beside the button. */
   beside?: ReactNode;
-  /** Told once the person is signed in. */
-  onSignedIn?: (me: Me) => void;
 };
 
 /** E-mail and password. */
-export function SignInForm({ email, beside, onSignedIn }: Props) {
+export function SignInForm({ email, beside }: Props) {
   const signIn = useSignIn();
   const form = useForm({ resolver: zodResolver(schema), defaultValues: { email: email ?? '', password: '' } });
   const { errors } = form.formState;
@@ -31,7 +29,7 @@ export function SignInForm({ email, beside, onSignedIn }: Props) {
       submit="Sign in"
       busy="Signing in"
       beside={beside}
-      send={async (body) => onSignedIn?.(await signIn.mutateAsync(body))}
+      send={(body) => signIn.mutateAsync(body)}
     >
       <FormField label="E-mail" error={errors.email?.message}>
         <input
