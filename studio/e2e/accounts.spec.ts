@@ -245,6 +245,67 @@ test('an invitation for somebody else is explained, and a workspace of others le
   await other.context().close();
 });
 
+test('the account takes a new e-mail by its mailed link, and a token for scripts is shown once', async ({
+  page,
+  request,
+}) => {
+  const owner = ines();
+  const id = await signUp(page, owner);
+  await page.goto('/account');
+  const newAddress = newEmail('ines.quispe');
+  const email = page.getByRole('form', { name: 'E-mail' });
+  await email.getByLabel('New e-mail').fill(newAddress);
+  await email.getByLabel('Present password', { exact: true }).fill('not the password');
+  await email.getByRole('button', { name: 'Mail a link to it' }).click();
+  await expect(email.getByLabel('Present password', { exact: true })).toHaveAttribute('aria-invalid', 'true');
+  await expect(email.getByLabel('New e-mail')).toHaveValue(newAddress);
+  await email.getByLabel('Present password', { exact: true }).fill(PASSWORD);
+  await email.getByRole('button', { name: 'Mail a link to it' }).click();
+  await expect(page.getByText(`A link is on its way to ${newAddress}`)).toBeVisible();
+
+  const form = page.getByRole('form', { name: 'New API token' });
+  await form.getByLabel('What it is for').fill('Night sweeps');
+  await form.getByLabel('Days until it expires').fill('0');
+  await form.getByRole('button', { name: 'Make a token' }).click();
+  await expect(form.getByLabel('Days until it expires')).toBeFocused();
+  await form.getByLabel('Days until it expires').fill('30');
+  await form.getByRole('button', { name: 'Make a token' }).click();
+  const secret = await page.getByLabel('Secret of Night sweeps').innerText();
+  const asScript = () =>
+    request.get(`/api/v1/workspaces/${id}`, { headers: { authorization: `Bearer ${secret}` } }).then((a) => a.status());
+  expect(await asScript()).toBe(200);
+  await page.reload();
+  await expect(page.getByRole('table', { name: 'API tokens' })).toContainText('Night sweeps');
+  await expect(page.getByText(secret)).toHaveCount(0);
+  await page.getByRole('button', { name: 'Revoke Night sweeps' }).click();
+  await page.getByRole('alertdialog').getByRole('button', { name: 'Revoke' }).click();
+  await expect(page.getByText('No token yet.')).toBeVisible();
+  expect(await asScript()).toBe(401);
+
+  await page.goto(`/confirm-email#${await mailedToken(request, newAddress, 'confirm-email')}`);
+  await page.getByRole('button', { name: 'Take the new e-mail' }).click();
+  await page.getByRole('link', { name: 'Open the account' }).click();
+  await expect(page.getByText(newAddress, { exact: true })).toBeVisible();
+});
+
+test('signing in through the company leads to the page that was asked for; where it fails, that is said', async ({
+  page,
+}) => {
+  await page.goto('/sign-in?problem=EMAIL_NOT_VERIFIED');
+  await expect(page.getByRole('alert')).toContainText('has not confirmed the e-mail');
+  await page.goto('/account?from=mail#devices');
+  await page.getByRole('link', { name: /^Sign in with/ }).click();
+  const address = newEmail('mateo');
+  await page.getByLabel('E-mail').fill(address);
+  await page.getByLabel('Name').fill('Mateo Condori');
+  await page.getByRole('button', { name: 'Sign in' }).click();
+  await expect(page.getByRole('heading', { name: 'Account', level: 1 })).toBeVisible();
+  expect(page.url()).toContain('/account?from=mail#devices');
+  await expect(page.getByText('You sign in through your company.')).toBeVisible();
+  await fromMenu(page, 'Mateo Condori', 'Sign out');
+  await expect(page.getByRole('link', { name: 'Sign in' })).toBeVisible();
+});
+
 for (const colorScheme of ['light', 'dark'] as const) {
   test.describe(colorScheme, () => {
     test.use({ colorScheme });

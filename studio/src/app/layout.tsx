@@ -20,12 +20,14 @@ export function Layout() {
       <main id="main" tabIndex={-1} className="outline-none">
         <Outlet />
       </main>
-      <Toasts />
-      {me && hasEnded && (
-        <Suspense fallback={null}>
-          <SessionEndDialog person={me.person} />
-        </Suspense>
-      )}
+      <div className="bottom-edge">
+        <Toasts />
+        {me && hasEnded && (
+          <Suspense fallback={null}>
+            <SessionEndDialog person={me.person} />
+          </Suspense>
+        )}
+      </div>
       <ScrollRestoration />
     </>
   );

@@ -1,3 +1,4 @@
+import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import type { Person } from '../../../server/src/contract/account.ts';
@@ -5,6 +6,7 @@ import { Dialog } from '../components/dialog.tsx';
 import { Button } from '../components/button.tsx';
 import { ProviderButton } from '../features/sign-in/components/provider-button.tsx';
 import { SignInForm } from '../features/sign-in/components/sign-in-form.tsx';
+import { meQuery } from '../lib/session/me-query.ts';
 
 /**
  * Signing in again over the page, which keeps all that was typed. A sign-in in another tab is noticed when this one is
@@ -12,15 +14,14 @@ import { SignInForm } from '../features/sign-in/components/sign-in-form.tsx';
  */
 export function SessionEndDialog({ person }: { person: Person }) {
   const [isPutOff, setPutOff] = useState(false);
+  useQuery({ ...meQuery, refetchOnWindowFocus: 'always' });
   if (isPutOff) {
     return (
-      <div className="toasts" role="status">
-        <div className="toast stop">
-          <p>Signed out on this device: nothing is kept on the server until you sign in again.</p>
-          <button className="lnk" onClick={() => setPutOff(false)}>
-            Sign in
-          </button>
-        </div>
+      <div className="toast stop" role="status">
+        <p>Signed out on this device: nothing is kept on the server until you sign in again.</p>
+        <button className="lnk" onClick={() => setPutOff(false)}>
+          Sign in
+        </button>
       </div>
     );
   }
