@@ -27,7 +27,7 @@ type Props = { state: StudyState; revision: number };
 /** How far a study has come, and the number of its newest revision. */
 export function StateWithRevision({ state, revision }: Props) {
   return (
-    <span className="inline-flex items-center gap-[8px] whitespace-nowrap">
+    <span className="inline-flex items-center gap-[8px] align-middle whitespace-nowrap">
       <StateMark state={state} />
       {stateWords[state]}
       <span className="num text-ink3">
