@@ -1,15 +1,7 @@
 import { quantities, type Quantity, type StudyIssue } from '@voltiplano/engine';
 import { readCell } from '../../../components/fields/grid.ts';
-import type { FieldHelpText } from '../../../components/fields/field-help.tsx';
-import {
-  measureOf,
-  numberText,
-  quantityPathOf,
-  shownUnit,
-  storedText,
-  toShown,
-  type Measure,
-} from '../../../components/fields/measure.ts';
+import { helpOf, shownBounds } from '../../../components/fields/quantity-help.ts';
+import { measureOf, quantityPathOf, shownUnit, storedText, type Measure } from '../../../components/fields/measure.ts';
 import { useUnits, type TemperatureUnit } from '../../../lib/units.ts';
 import { isMoved } from '../model/changes.ts';
 import { filledOf, issuesOf } from '../model/derived.ts';
@@ -72,28 +64,4 @@ function errorText(
     : elsewhere && `Waits until “${labelOfPath(elsewhere.path)}” is right.`;
   if (!why) return undefined;
   return stillUsed === undefined ? why : `${why} The curves still use ${stillUsed || 'none'}.`;
-}
-
-function shownBounds({ min, max, usual }: Quantity, measure: Measure, temperature: TemperatureUnit) {
-  const shown = (value: number) => toShown(value, measure, temperature);
-  return {
-    range: { min: shown(min), max: shown(max) },
-    usual: usual && ([shown(usual[0]), shown(usual[1])] as const),
-  };
-}
-
-function helpOf(quantity: Quantity, measure: Measure, temperature: TemperatureUnit): FieldHelpText {
-  const { min, max, above, integer, usual, source, what } = quantity;
-  const unit = shownUnit(measure, temperature);
-  const withUnit = (value: number) => [numberText(value, 0), unit].join(' ').trim();
-  const span = (from: number, to: number) => `${numberText(from, 0)} to ${withUnit(to)}`;
-  const bounds = shownBounds(quantity, measure, temperature);
-  const low = toShown(min, measure, temperature);
-  const high = toShown(max, measure, temperature);
-  return {
-    what,
-    ...(usual && bounds.usual ? { usual: span(...bounds.usual) } : {}),
-    allowed: `${above ? `above ${numberText(low, 0)}, up to ${withUnit(high)}` : span(low, high)}${integer ? ', whole numbers' : ''}`,
-    ...(source ? { source } : {}),
-  };
 }
