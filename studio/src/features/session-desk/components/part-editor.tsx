@@ -10,7 +10,7 @@ import { useDeskRuns } from '../hooks/use-desk-runs.ts';
 import { DeskContext } from '../hooks/use-desk.ts';
 import { usePartStore, type OpenedPart } from '../hooks/use-part-store.ts';
 import type { PartBody, SessionPartKind } from '../model/carriers.ts';
-import type { PartEntry, PartStore } from '../model/part-store.ts';
+import { entriesOf, type PartEntry, type PartStore } from '../model/part-store.ts';
 import { UndoActions } from './inputs-panel.tsx';
 import { PartPreview } from './part-preview.tsx';
 import { PartSections } from './part-sections.tsx';
@@ -27,8 +27,8 @@ export type PartEditorHandle = {
 
 type Props = {
   kind: SessionPartKind;
-  /** What the editor begins with; later changes come through the handle. */
-  initial: PartEntry;
+  /** What the editor begins with, as `onChange` once told it; later changes come through the handle. */
+  initial: { body: PartBody; pending: Record<string, unknown> };
   /** What changes are marked against; null where the part is new. */
   saved: PartBody | null;
   readOnly?: boolean;
@@ -52,7 +52,8 @@ export function PartEditor(props: Props) {
 }
 
 function ReadablePart(props: Props) {
-  const opened = usePartStore(props.kind, props.initial, props.saved);
+  const { body, pending } = props.initial;
+  const opened = usePartStore(props.kind, { body, pending: entriesOf(pending) }, props.saved);
   const { store, carrier, failed, carryOn } = opened;
   if (store) return <OpenPart {...props} opened={opened} store={store} />;
   if (!failed) return <p className="awaited">Opening the part</p>;

@@ -7,6 +7,16 @@ import { applied, isReadable, type Draft, type Entry } from './draft.ts';
 /** A part being worked on, and what was entered that does not stand in it yet. */
 export type PartEntry = { body: PartBody; pending: Record<string, Entry> };
 
+/** Entries out of what was kept somewhere; what cannot be one is left out. */
+export function entriesOf(pending: Record<string, unknown>): Record<string, Entry> {
+  return Object.fromEntries(Object.entries(pending).filter((pair): pair is [string, Entry] => isEntry(pair[1])));
+}
+
+function isEntry(value: unknown): value is Entry {
+  const isCell = (one: unknown) => one === null || typeof one === 'number' || typeof one === 'string';
+  return isCell(value) || (Array.isArray(value) && value.every((row) => Array.isArray(row) && row.every(isCell)));
+}
+
 /** A desk for one part of a study: the rest of the study carries it, and gives way to it. */
 export type PartStore = DeskStore & {
   /** The part and what waits, as they are now; the same object until one of them changes. */
