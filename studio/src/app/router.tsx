@@ -67,6 +67,14 @@ const workspacePages: RouteObject[] = [
     lazy: async () => ({ Component: (await import('../features/activity/activity-page.tsx')).ActivityPage }),
   },
   {
+    path: 'library',
+    lazy: async () => ({ Component: (await import('../features/library/library-page.tsx')).LibraryPage }),
+  },
+  {
+    path: 'library/:itemId',
+    lazy: async () => ({ Component: (await import('./library-item-route.tsx')).LibraryItemRoute }),
+  },
+  {
     path: 'studies/:studyId',
     lazy: async () => ({
       Component: (await import('../features/session-desk/study-desk-page.tsx')).StudyDeskPage,
