@@ -5,6 +5,7 @@ import { useDispatch } from '../hooks/use-desk.ts';
 import type { StudyFiles } from '../hooks/use-study-files.ts';
 import { examples } from '../../../lib/examples.ts';
 import { ExportMenu } from './export-menu.tsx';
+import { KeepAction } from './keep-action.tsx';
 import type { HeadTools } from './session-desk.tsx';
 
 /** Examples, files, export, and the one next step: keep what is there as baseline. */
@@ -23,6 +24,7 @@ export function DeskActions({ files, pickFile, showKeys, stripsRef, ledgerRef }:
         ))}
       </Menu>
       <StudyMenu files={files} onOpen={pickFile} onShowKeys={showKeys} />
+      <KeepAction />
       <ExportMenu stripsRef={stripsRef} ledgerRef={ledgerRef} />
       <Button go onClick={() => dispatch({ type: 'keep-baseline' })}>
         Keep as baseline
