@@ -68,9 +68,9 @@ test('edits of a tab that was closed without a connection are found and sent by 
   await page.close();
   await context.setOffline(false);
   const next = await context.newPage();
-  await openStudy(next, team, id);
-  await expect(current(next)).toHaveValue('365');
+  await next.goto(`/w/${team.workspaceId}/studies/${id}`);
   await expect(next.getByText('Found in this browser')).toBeVisible();
+  await expect(current(next)).toHaveValue('365');
   await expect.poll(() => savedCurrent(next, team, id)).toBe(365);
 });
 

@@ -7,7 +7,7 @@ import { DifferenceList } from '../../../components/difference-list.tsx';
 import { Notice } from '../../../components/notice.tsx';
 import { toast } from '../../../components/toasts.tsx';
 import { problemSentence } from '../../../lib/api/api-problem.ts';
-import { formatMoment } from '../../../lib/format-moment.ts';
+import { formatAgo } from '../../../lib/moments.ts';
 import { useWorkspace } from '../../../lib/session/use-workspace.ts';
 import { useUnits } from '../../../lib/units.ts';
 import { useConflict } from '../hooks/use-conflict.ts';
@@ -34,7 +34,7 @@ export function ConflictDialog({ store, isChoosing, onChoosing }: Props) {
   return (
     <Dialog
       title="Changed in two places"
-      about={`Saved ${formatMoment(theirs.changedAt)} by ${who}, before your changes on this desk were. Nothing is sent until you choose.`}
+      about={`Saved ${formatAgo(theirs.changedAt)} by ${who}, before your changes on this desk were. Nothing is sent until you choose.`}
       open={isChoosing}
       onOpenChange={onChoosing}
     >

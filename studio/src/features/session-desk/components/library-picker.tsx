@@ -5,7 +5,7 @@ import { AsyncView } from '../../../components/async-view.tsx';
 import { Dialog } from '../../../components/dialog.tsx';
 import { FormField } from '../../../components/form/form-field.tsx';
 import { Notice } from '../../../components/notice.tsx';
-import { formatMoment } from '../../../lib/format-moment.ts';
+import { formatAgo } from '../../../lib/moments.ts';
 import { libraryFindQuery } from '../api/library-queries.ts';
 import { useStudyDesk } from '../hooks/study-desk-context.ts';
 import { useLibraryTaking } from '../hooks/use-library-taking.ts';
@@ -51,7 +51,7 @@ export function LibraryPicker({ part, onOpenChange }: Props) {
                   <li key={item.id}>
                     <button type="button" onClick={() => choose(item)}>
                       <b>{item.name}</b>
-                      <small>{`revision ${item.revision}, ${formatMoment(item.changedAt)}${item.notes ? `. ${item.notes}` : ''}`}</small>
+                      <small>{`revision ${item.revision}, ${formatAgo(item.changedAt)}${item.notes ? `. ${item.notes}` : ''}`}</small>
                     </button>
                   </li>
                 ))}

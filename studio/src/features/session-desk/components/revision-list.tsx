@@ -1,8 +1,8 @@
 import { useInfiniteQuery } from '@tanstack/react-query';
 import { Fragment, type ReactNode } from 'react';
 import type { StudyFile, StudyRevisionRow } from '../../../../../server/src/contract/study.ts';
+import { Moment } from '../../../components/moment.tsx';
 import { AsyncView } from '../../../components/async-view.tsx';
-import { formatMoment } from '../../../lib/format-moment.ts';
 import { useUnits } from '../../../lib/units.ts';
 import { revisionsQuery } from '../api/revision-queries.ts';
 import type { StudyPlace } from '../api/study-query.ts';
@@ -56,7 +56,9 @@ function Revision({ row, before, place, newest, now, actions }: RevisionProps) {
       <h3>
         <span className="num">{revision}</span> {message}
       </h3>
-      <p className="by">{`${by?.name ?? 'account gone'}, ${formatMoment(at)}`}</p>
+      <p className="by">
+        {by?.name ?? 'account gone'}, <Moment at={at} />
+      </p>
       <Numbers row={row} before={before} />
       <div className="revision-actions">
         <button

@@ -15,7 +15,8 @@ import { useUnits } from '../../../lib/units.ts';
 import { revisionQuery, revisionsQuery } from '../api/revision-queries.ts';
 import { revisionMessage, saveRevision } from '../api/save-revision.ts';
 import { setStudy, studyQuery } from '../api/study-query.ts';
-import { useStudy, useStudyDesk } from '../hooks/study-desk-context.ts';
+import { useStudyDesk } from '../hooks/study-desk-context.ts';
+import { useStudy } from '../hooks/use-study.ts';
 import { useWishKey } from '../hooks/use-wish-key.ts';
 import type { DeskStore } from '../model/desk-store.ts';
 

@@ -1,10 +1,11 @@
-import { useEffect, useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import { Button } from '../../../components/button.tsx';
 import { TitleBlock } from '../../../components/title-block.tsx';
+import { useNow } from '../../../lib/use-now.ts';
 import { useWorkspace } from '../../../lib/session/use-workspace.ts';
 import { revisionQuery } from '../api/revision-queries.ts';
-import { useSaver, useStudy, useStudyDesk } from '../hooks/study-desk-context.ts';
+import { useSaver, useStudyDesk } from '../hooks/study-desk-context.ts';
+import { useStudy } from '../hooks/use-study.ts';
 import { useDesk } from '../hooks/use-desk.ts';
 import { useHistoryPlace } from '../hooks/use-history-place.ts';
 import { changedPaths } from '../model/changes.ts';
@@ -78,11 +79,9 @@ function inputsWords(count: number): string {
   return `${count} ${count === 1 ? 'input' : 'inputs'}`;
 }
 
-const MINUTE_MS = 60_000;
-
 function KeptWords({ onChoose }: { onChoose: () => void }) {
   const state = useSaver();
-  const now = useMinute();
+  const now = useNow();
   const { text, isTrouble } = saveWords(state, now);
   return (
     <span className={isTrouble ? 'kept trouble' : 'kept'}>
@@ -97,18 +96,6 @@ function KeptWords({ onChoose }: { onChoose: () => void }) {
       </span>
     </span>
   );
-}
-
-/** The time, anew each minute and at each drawing that has another reason. */
-function useMinute(): number {
-  const [, setNow] = useState(0);
-  // Speaks to the clock.
-  useEffect(() => {
-    const timer = setInterval(() => setNow(Date.now()), MINUTE_MS);
-    return () => clearInterval(timer);
-  }, []);
-  // eslint-disable-next-line react-hooks/purity -- words about the time are of the moment they are drawn
-  return Date.now();
 }
 
 function ReadOnlyWords({ hidesChanges }: { hidesChanges: boolean }) {

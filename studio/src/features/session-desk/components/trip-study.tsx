@@ -7,9 +7,9 @@ import { Caution } from '../../../components/caution.tsx';
 import { ConfirmDialog } from '../../../components/confirm.tsx';
 import { DifferenceList } from '../../../components/difference-list.tsx';
 import { Menu, MenuItem, MenuRule } from '../../../components/menu.tsx';
+import { Moment } from '../../../components/moment.tsx';
 import { Notice } from '../../../components/notice.tsx';
 import { TitleBlock } from '../../../components/title-block.tsx';
-import { formatMoment } from '../../../lib/format-moment.ts';
 import { useWorkspace } from '../../../lib/session/use-workspace.ts';
 import { studyDifferences } from '../../../lib/study-differences.ts';
 import { useUnits } from '../../../lib/units.ts';
@@ -29,7 +29,7 @@ export function TripStudy({ place, study }: Props) {
   const deeds = useStudyDeeds(place);
   const cells = [
     { label: 'Revision', value: `${study.revision}, ${stateWords[study.state]}` },
-    { label: 'Changed', value: formatMoment(study.changedAt) },
+    { label: 'Changed', value: <Moment at={study.changedAt} /> },
     { label: 'Owner', value: study.owner?.name ?? 'account gone' },
     ...(study.archivedAt === null ? [] : [{ label: 'Kept', value: 'In the archive' }]),
   ];

@@ -1,7 +1,5 @@
-import { useQuery } from '@tanstack/react-query';
 import { createContext, useContext, useSyncExternalStore } from 'react';
-import type { Study } from '../../../../../server/src/contract/study.ts';
-import { studyQuery, type StudyPlace } from '../api/study-query.ts';
+import type { StudyPlace } from '../api/study-query.ts';
 import type { SaverState, WorkingCopySaver } from '../model/working-copy-saver.ts';
 
 /** A study of a workspace that stands on the desk. */
@@ -25,14 +23,6 @@ export function useStudyDesk(): StudyDesk {
   const desk = useContext(StudyDeskContext);
   if (!desk) throw new Error('Used on a desk without a study of a workspace');
   return desk;
-}
-
-/** The study as the server last told it. The page draws the desk only once it is here. */
-export function useStudy(): Study {
-  const { place } = useStudyDesk();
-  const { data } = useQuery(studyQuery(place));
-  if (!data) throw new Error('Used before the study was read');
-  return data;
 }
 
 /** How far the desk's changes have come. */

@@ -3,7 +3,8 @@ import type { LibraryRevision } from '../../../../../server/src/contract/library
 import type { PartReference } from '../../../../../server/src/contract/study.ts';
 import { libraryRevisionQuery } from '../api/library-queries.ts';
 import { referenceTo, saysOtherwise, type DeskPart } from '../model/library-parts.ts';
-import { useStudy, useStudyDesk } from './study-desk-context.ts';
+import { useStudyDesk } from './study-desk-context.ts';
+import { useStudy } from './use-study.ts';
 import { useDesk } from './use-desk.ts';
 
 /** Where a part of the desk came from, and how the library stands to it. */

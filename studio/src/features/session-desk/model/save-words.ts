@@ -1,4 +1,4 @@
-import { formatMoment } from '../../../lib/format-moment.ts';
+import { formatAgo } from '../../../lib/moments.ts';
 import type { SaverState } from './working-copy-saver.ts';
 
 export type SaveWords = {
@@ -13,7 +13,10 @@ export function saveWords({ phase, isHeld }: SaverState, now: number): SaveWords
     : 'This browser refuses to hold your changes: export the study file.';
   switch (phase.kind) {
     case 'kept':
-      return { text: phase.at === null ? 'on the server' : formatMoment(phase.at, now), isTrouble: false };
+      return {
+        text: phase.at === null ? 'on the server' : formatAgo(new Date(phase.at).toISOString(), new Date(now)),
+        isTrouble: false,
+      };
     case 'saving':
       return isHeld
         ? { text: 'saving', isTrouble: false }
