@@ -226,7 +226,9 @@ test.describe('parts of the library', () => {
     const { station } = inputs;
     const library = `/workspaces/${team.workspaceId}/library`;
     const common = { name: 'Salar Tola 500 A', notes: '', source: 'invented' };
-    const item = await call<Item>(caller(page), 'post', library, { body: { kind: 'station', ...common, body: station! } });
+    const item = await call<Item>(caller(page), 'post', library, {
+      body: { kind: 'station', ...common, body: station! },
+    });
     const parts = [{ part: 'station', itemId: item.id, revision: 1 }];
     const { id } = await makeStudy(page, team, inputs, parts);
     const revise = (currentMaxA: number) =>
