@@ -1,11 +1,5 @@
 import type { StudyState } from '../../../server/src/contract/study-words.ts';
-
-/** What the states are called on screen. */
-export const stateWords: Record<StudyState, string> = {
-  draft: 'draft',
-  'in-review': 'in review',
-  released: 'released',
-};
+import { stateWords } from '../lib/study-names.ts';
 
 /** The mark as a state: dashed for a draft, in clay for one in review, filled ground for one released. */
 function StateMark({ state }: { state: StudyState }) {

@@ -17,7 +17,8 @@ import type { StudyPlace } from '../api/study-query.ts';
 import { useHistoryPlace } from '../hooks/use-history-place.ts';
 import { useStudyDeeds } from '../hooks/use-study-deeds.ts';
 import { revisionNumbers } from '../model/revision-numbers.ts';
-import { stateWords, studyKindLine } from '../model/study-line.ts';
+import { stateWords } from '../../../lib/study-names.ts';
+import { studyKindLine } from '../model/study-line.ts';
 import { RevisionList } from './revision-list.tsx';
 
 type Props = { place: StudyPlace; study: Study };

@@ -1,7 +1,7 @@
 import { useCallback, useId, useRef, type ReactNode } from 'react';
 import { studyKinds, studyStates } from '../../../../../server/src/contract/study-words.ts';
-import { stateWords } from '../../../components/study-state.tsx';
 import { WordSwitch } from '../../../components/word-switch.tsx';
+import { stateWords } from '../../../lib/study-names.ts';
 import { useWorkspace } from '../../../lib/session/use-workspace.ts';
 import { useMembers } from '../api/list-members.ts';
 import type { ChangeView } from '../hooks/use-list-view.ts';

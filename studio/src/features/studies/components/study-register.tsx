@@ -3,10 +3,10 @@ import type { StudyRow } from '../../../../../server/src/contract/study.ts';
 import { SectionPatterns } from '../../../charts/section-thumbnail.tsx';
 import { useWidth } from '../../../charts/use-width.ts';
 import { DataTable, type Column } from '../../../components/data-table.tsx';
+import { studyNumber } from '../../../lib/study-names.ts';
 import { useUnits, type TemperatureUnit } from '../../../lib/units.ts';
 import type { RowDeeds } from '../hooks/use-row-deeds.ts';
 import { sortedBy, type ListView, type SortBy } from '../model/list-view.ts';
-import { numberWords } from '../model/row-words.ts';
 import { RowActs } from './row-acts.tsx';
 import { ChangedCell, CoreCell, MinutesCell, SECTION_MIN, SectionCell, StateCell, TitleCell } from './study-cells.tsx';
 
@@ -54,7 +54,7 @@ function columnsOf(width: number, degrees: TemperatureUnit, deeds: RowDeeds): Co
       head: 'No.',
       className: 'c-number',
       isSortable: true,
-      cell: ({ number }) => <span className="num">{numberWords(number)}</span>,
+      cell: ({ number }) => <span className="num">{studyNumber(number)}</span>,
     },
     {
       id: 'title',

@@ -5,10 +5,10 @@ import { fileNameOf } from '../../../charts/export-text.ts';
 import { toast } from '../../../components/toasts.tsx';
 import { problemSentence } from '../../../lib/api/api-problem.ts';
 import { useWorkspace } from '../../../lib/session/use-workspace.ts';
+import { studyNumber } from '../../../lib/study-names.ts';
 import { useCopyStudy } from '../api/copy-study.ts';
 import { useMoveStudy } from '../api/move-study.ts';
 import { readStudy } from '../api/read-study.ts';
-import { numberWords } from '../model/row-words.ts';
 
 export type RowDeeds = {
   copy: (row: StudyRow) => void;
@@ -47,7 +47,7 @@ export function useRowDeeds(): RowDeeds {
 async function exportStudy(workspaceId: string, { id, number }: StudyRow): Promise<void> {
   const { title, working, revision } = await readStudy(workspaceId, id);
   const text = `${JSON.stringify(working.inputs, null, 2)}\n`;
-  saveFile(new Blob([text], { type: 'application/json' }), fileNameOf(`${numberWords(number)} ${title}`, '', 'json'));
+  saveFile(new Blob([text], { type: 'application/json' }), fileNameOf(`${studyNumber(number)} ${title}`, '', 'json'));
   toast(
     working.isChanged
       ? `Exported “${title}” as it is now, changed since revision ${revision}.`

@@ -24,12 +24,12 @@ export type ListView = {
 
 /** What can be sorted by: what the sort is called, and the order one asks for first. */
 export const sorts: Record<SortBy, { words: Record<'asc' | 'desc', string>; first: 'asc' | 'desc' }> = {
-  changed: { words: { desc: 'changed, newest first', asc: 'changed, oldest first' }, first: 'desc' },
-  number: { words: { desc: 'number, highest first', asc: 'number, lowest first' }, first: 'desc' },
-  title: { words: { asc: 'title, from A', desc: 'title, from Z' }, first: 'asc' },
-  minutes10To80: { words: { asc: '10–80 %, fastest first', desc: '10–80 %, slowest first' }, first: 'asc' },
-  hottestCoreC: { words: { desc: 'core, hottest first', asc: 'core, coolest first' }, first: 'desc' },
-  owner: { words: { asc: 'owner, from A', desc: 'owner, from Z' }, first: 'asc' },
+  changed: { words: { desc: 'changed, newest', asc: 'changed, oldest' }, first: 'desc' },
+  number: { words: { desc: 'number, highest', asc: 'number, lowest' }, first: 'desc' },
+  title: { words: { asc: 'title, A to Z', desc: 'title, Z to A' }, first: 'asc' },
+  minutes10To80: { words: { asc: '10–80 %, fastest', desc: '10–80 %, slowest' }, first: 'asc' },
+  hottestCoreC: { words: { desc: 'core, hottest', asc: 'core, coolest' }, first: 'desc' },
+  owner: { words: { asc: 'owner, A to Z', desc: 'owner, Z to A' }, first: 'asc' },
 };
 
 export const wholeList: ListView = {

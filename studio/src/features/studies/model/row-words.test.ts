@@ -1,15 +1,11 @@
 import { expect, test } from 'vitest';
-import { countLine, numberWords, partsLine, studiesWord } from './row-words.ts';
+import { countLine, partsLine, studiesWord } from './row-words.ts';
 
 test('partsLine says the kind and what the study is made of, as far as that is known', () => {
   const session = { kind: 'session', packName: 'Vicuña 86', stationName: 'Salar Tola 150' } as const;
   expect(partsLine(session)).toBe('Session: Vicuña 86, Salar Tola 150');
   expect(partsLine({ ...session, kind: 'trip', stationName: null })).toBe('Trip: Vicuña 86');
   expect(partsLine({ kind: 'sweep', packName: null, stationName: null })).toBe('Sweep');
-});
-
-test('numberWords has three figures, and more where they are needed', () => {
-  expect([1, 31, 1204].map(numberWords)).toEqual(['001', '031', '1204']);
 });
 
 test('countLine counts the workspace, and with a filter what is shown of it', () => {

@@ -1,7 +1,5 @@
 import type { StudyRow } from '../../../../../server/src/contract/study.ts';
-import type { StudyKind } from '../../../../../server/src/contract/study-words.ts';
-
-const kindNames: Record<StudyKind, string> = { session: 'Session', trip: 'Trip', sweep: 'Sweep', fit: 'Fit' };
+import { kindNames } from '../../../lib/study-names.ts';
 
 /** "Session: Vicuña 86, Salar Tola 150". */
 export function partsLine({
@@ -11,11 +9,6 @@ export function partsLine({
 }: Pick<StudyRow, 'kind' | 'packName' | 'stationName'>): string {
   const parts = [packName, stationName].filter(Boolean).join(', ');
   return parts ? `${kindNames[kind]}: ${parts}` : kindNames[kind];
-}
-
-/** The number of a study, as registers write it: "007". */
-export function numberWords(number: number): string {
-  return String(number).padStart(3, '0');
 }
 
 type Counts = { total: number; inReviewTotal: number };
