@@ -147,6 +147,7 @@ test('a session that ends under a page is taken up again over it, and nothing ty
   await page.getByRole('button', { name: 'Rename' }).click();
   const dialog = page.getByRole('dialog', { name: 'Signed out on this device' });
   await expect(dialog.getByLabel('E-mail')).toHaveValue(owner.email);
+  await expect(dialog.getByLabel('Password', { exact: true })).toBeFocused();
   await dialog.getByLabel('Password', { exact: true }).fill(PASSWORD);
   await dialog.getByRole('button', { name: 'Sign in', exact: true }).click();
   await expect(dialog).toHaveCount(0);

@@ -3,7 +3,6 @@ import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import type { Person } from '../../../server/src/contract/account.ts';
 import { Dialog } from '../components/dialog.tsx';
-import { Button } from '../components/button.tsx';
 import { ProviderButton } from '../features/sign-in/components/provider-button.tsx';
 import { SignInForm } from '../features/sign-in/components/sign-in-form.tsx';
 import { meQuery } from '../lib/session/me-query.ts';
@@ -35,11 +34,9 @@ export function SessionEndDialog({ person }: { person: Person }) {
       {person.hasPassword && <SignInForm email={person.email} />}
       <div className="form-actions mt-[16px]">
         <ProviderButton next="/" isApart />
-        <Button asChild>
-          <Link to="/sign-in" reloadDocument>
-            Leave this page and sign in as another person
-          </Link>
-        </Button>
+        <Link className="lnk" to="/sign-in" reloadDocument>
+          Leave this page and sign in as another person
+        </Link>
       </div>
     </Dialog>
   );

@@ -8,10 +8,12 @@ type Props = {
   error?: string | undefined;
   autoComplete: 'current-password' | 'new-password';
   registration: UseFormRegisterReturn;
+  /** The one thing left to type. */
+  autoFocus?: boolean;
 };
 
 /** A password, hidden until it is asked to be shown. */
-export function PasswordField({ label, hint, error, autoComplete, registration }: Props) {
+export function PasswordField({ label, hint, error, autoComplete, registration, autoFocus }: Props) {
   const [isShown, setShown] = useState(false);
   const toggle = (
     <button
@@ -31,6 +33,7 @@ export function PasswordField({ label, hint, error, autoComplete, registration }
         autoComplete={autoComplete}
         autoCapitalize="none"
         spellCheck={false}
+        autoFocus={autoFocus}
         {...registration}
       />
     </FormField>

@@ -46,6 +46,7 @@ export function SignInForm({ email, beside }: Props) {
         autoComplete="current-password"
         error={errors.password?.message}
         registration={form.register('password')}
+        autoFocus={email !== undefined}
       />
     </Form>
   );
