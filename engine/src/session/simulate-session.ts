@@ -17,6 +17,7 @@ import { limitCodes } from './limits.ts';
 import { SessionMarks } from './session-marks.ts';
 import type { EndReason, RunEvent, SessionResult } from './result.ts';
 import { SeriesRecorder } from './series-recorder.ts';
+import type { SessionObserver } from './session-observer.ts';
 import { inconsistent, NotFinite, SessionSystem } from './session-system.ts';
 import { makeStepper, type Accuracy } from './make-stepper.ts';
 
@@ -27,6 +28,8 @@ export type SessionOptions = Accuracy & {
   onProgress?: (share: number) => void;
   /** Stop the integration where one limit hands over to another (default), or let steps run across. */
   stopAtSwitchOvers?: boolean;
+  /** Shown every moment the run looks at. */
+  observer?: SessionObserver;
 };
 
 export type RunStatistics = { evaluations: number; looks: number; steps: number; starts: number; rows: number };
@@ -113,8 +116,9 @@ class SessionSimulation {
     this.climbVoltageLedges();
     this.code = this.system.charge.code;
     this.event(`limit:${limitCodes[this.code]}`);
+    this.options.observer?.begin?.(this.solution);
     this.row(this.code);
-    this.marks.sample(0);
+    this.sample(0);
     if (startSoc >= targetSoc) this.end('target');
     else if (this.isSpent()) this.end('cutoff');
   }
@@ -177,9 +181,22 @@ class SessionSimulation {
   /** Takes the marks and extremes on the way to a moment, and leaves the system showing it. */
   private settle(step: Step, t: number): void {
     this.solution.look(t);
-    this.marks.sample(t);
+    this.sample(t);
     this.marks.pass(step, this.settledS, t);
+    this.options.observer?.pass?.(step, this.settledS, t);
     this.settledS = t;
+  }
+
+  /** Takes the moment shown into the extremes. */
+  private sample(t: number): void {
+    this.marks.sample(t);
+    this.options.observer?.sample?.(t, this.code);
+  }
+
+  /** What comes next does not go on from here: a jump, or the end. */
+  private close(): void {
+    this.marks.close();
+    this.options.observer?.close?.();
   }
 
   private rowAfter(t: number): number {
@@ -257,7 +274,7 @@ class SessionSimulation {
   private jump(change: () => void): void {
     const { charge } = this.system;
     const { t, code } = this;
-    this.marks.close();
+    this.close();
     this.solution.look(t);
     const before = charge.current;
     this.row(code);
@@ -267,14 +284,20 @@ class SessionSimulation {
     const onGrid = t === this.nextRowS;
     if (onGrid) this.nextRowS = this.rowAfter(t);
     if (jumped) this.row(charge.code);
-    else if (!onGrid) this.recorder.drop();
-    this.marks.sample(t);
+    else if (!onGrid) this.dropRow();
     this.changeCode(t, charge.code);
+    this.sample(t);
     if (this.isSpent()) this.end('cutoff');
   }
 
   private row(code: number): void {
     this.recorder.row(this.solution.at, this.solution.seen, code);
+    this.options.observer?.row?.(this.solution.at, code);
+  }
+
+  private dropRow(): void {
+    this.recorder.drop();
+    this.options.observer?.dropRow?.();
   }
 
   private finalRow(reason: EndReason): void {
@@ -284,7 +307,7 @@ class SessionSimulation {
   }
 
   private end(reason: EndReason): void {
-    this.marks.close();
+    this.close();
     this.marks.hold(this.code, this.t - this.heldSinceS);
     this.ended = reason;
     this.event(`end:${reason}`);
