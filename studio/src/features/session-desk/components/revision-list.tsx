@@ -15,6 +15,8 @@ type Props = {
   newest: number;
   /** What is worked on now, to compare with. */
   now: () => StudyFile;
+  /** What the whole time of a run is called. */
+  end?: string;
   /** What can be done with a revision. */
   actions: (revision: number) => ReactNode;
 };
@@ -47,7 +49,7 @@ export function RevisionList(props: Props) {
 
 type RevisionProps = Props & { row: StudyRevisionRow; before: StudyRevisionRow | undefined };
 
-function Revision({ row, before, place, newest, now, actions }: RevisionProps) {
+function Revision({ row, before, place, newest, now, end, actions }: RevisionProps) {
   const history = useHistoryPlace();
   const { revision, message, at, by } = row;
   const isOpen = history.revision === revision;
@@ -59,7 +61,7 @@ function Revision({ row, before, place, newest, now, actions }: RevisionProps) {
       <p className="by">
         {by?.name ?? 'account gone'}, <Moment at={at} />
       </p>
-      <Numbers row={row} before={before} />
+      <Numbers row={row} before={before} end={end} />
       <div className="revision-actions">
         <button
           type="button"
@@ -76,9 +78,9 @@ function Revision({ row, before, place, newest, now, actions }: RevisionProps) {
   );
 }
 
-function Numbers({ row, before }: Pick<RevisionProps, 'row' | 'before'>) {
+function Numbers({ row, before, end }: Pick<RevisionProps, 'row' | 'before' | 'end'>) {
   const units = useUnits();
-  const numbers = revisionNumbers(row.numbers, before?.numbers, units);
+  const numbers = revisionNumbers(row.numbers, before?.numbers, units, end);
   if (numbers.length === 0) return <p className="revision-numbers">no numbers: the run came to none</p>;
   return (
     <p className="revision-numbers">

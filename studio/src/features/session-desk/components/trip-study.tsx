@@ -21,6 +21,9 @@ import { stateWords } from '../../../lib/study-names.ts';
 import { studyKindLine } from '../model/study-line.ts';
 import { RevisionList } from './revision-list.tsx';
 
+/** What the whole time of a trip is called. */
+const TRIP_END = 'door to door';
+
 type Props = { place: StudyPlace; study: Study };
 
 /** A study that has no desk yet, to be read: what it starts from, what it came to, and its history. */
@@ -60,6 +63,7 @@ export function TripStudy({ place, study }: Props) {
             <RevisionList
               place={place}
               newest={study.revision}
+              end={TRIP_END}
               now={() => study.working.inputs}
               actions={(revision) =>
                 may('edit-studies') && (
@@ -81,7 +85,7 @@ export function TripStudy({ place, study }: Props) {
 
 function Inputs({ study }: { study: Study }) {
   const units = useUnits();
-  const numbers = revisionNumbers(study.headline.numbers, null, units);
+  const numbers = revisionNumbers(study.headline.numbers, null, units, TRIP_END);
   const { format: _format, version: _version, kind: _kind, title: _title, ...inputs } = study.working.inputs;
   return (
     <>
@@ -100,7 +104,8 @@ function Inputs({ study }: { study: Study }) {
               <div key={caption}>
                 <dt>{caption}</dt>
                 <dd className="v">
-                  {value} <small>{unit}</small>
+                  {value}
+                  <small>{unit}</small>
                 </dd>
               </div>
             ))}

@@ -16,14 +16,19 @@ type Reading = {
   of: (numbers: Numbers) => number | null;
 };
 
-/** The numbers a list of revisions has room for; what a revision did not come to is left out. */
+/**
+ * The numbers a list of revisions has room for; what a revision did not come to is left out.
+ *
+ * @param end  what the whole time is called
+ */
 export function revisionNumbers(
   numbers: Numbers | null,
   before: Numbers | null | undefined,
   units: Units,
+  end = 'end',
 ): RevisionNumber[] {
   if (!numbers) return [];
-  return readings(units).flatMap(({ caption, unit, digits, kind, of }) => {
+  return readings(units, end).flatMap(({ caption, unit, digits, kind, of }) => {
     const value = of(numbers);
     if (value === null) return [];
     const difference = differenceInWords(value, before ? of(before) : null, digits, kind);
@@ -31,7 +36,7 @@ export function revisionNumbers(
   });
 }
 
-function readings(units: Units): Reading[] {
+function readings(units: Units, end: string): Reading[] {
   const duration = (caption: string, of: Reading['of']): Reading => ({
     caption,
     unit: 'min',
@@ -41,7 +46,7 @@ function readings(units: Units): Reading[] {
   });
   return [
     duration('10–80 %', (numbers) => numbers.minutes10To80),
-    duration('end', (numbers) => numbers.endMin),
+    duration(end, (numbers) => numbers.endMin),
     { caption: 'peak', unit: 'kW', digits: 1, kind: 'amount', of: (numbers) => numbers.peakStationPowerKw },
     {
       caption: 'hottest core',
