@@ -47,7 +47,8 @@ export async function join(owner: Page, guest: Page, team: Team, name: string, r
   await call(caller(guest), 'post', '/invitations/accept', { body: { token } });
 }
 
-async function mailedToken(page: Page, email: string): Promise<string> {
+/** The secret of the newest invitation mailed to somebody. */
+export async function mailedToken(page: Page, email: string): Promise<string> {
   let token: string | undefined;
   await expect
     .poll(async () => {
