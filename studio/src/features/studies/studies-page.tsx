@@ -3,6 +3,7 @@ import './studies.css';
 import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import { Button } from '../../components/button.tsx';
+import { Caution } from '../../components/caution.tsx';
 import { PageTitle } from '../../components/page-title.tsx';
 import { useWorkspace } from '../../lib/session/use-workspace.ts';
 import { useStudyCounts } from './api/count-studies.ts';
@@ -41,6 +42,7 @@ export function StudiesPage() {
       </div>
       <StudyFilters view={view} onChange={change} />
       <StudyList studies={studies} view={view} onChange={change} />
+      <Caution short invented />
       {files && <ImportDialog files={files} onClose={() => setFiles(null)} />}
     </FileDrop>
   );
