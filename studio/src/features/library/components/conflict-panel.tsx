@@ -4,6 +4,7 @@ import { DifferenceList } from '../../../components/difference-list.tsx';
 import { Notice } from '../../../components/notice.tsx';
 import { toast } from '../../../components/toasts.tsx';
 import { momentText } from '../../../lib/moment-text.ts';
+import type { Difference } from '../../../lib/study-differences.ts';
 import { useUnits } from '../../../lib/units.ts';
 import type { ItemDesk } from '../hooks/use-item-draft.ts';
 import { useNow } from '../hooks/use-now.ts';
@@ -11,13 +12,12 @@ import { itemDifferences } from '../model/item-content.ts';
 
 type Props = { desk: ItemDesk; theirs: LibraryItem };
 
-/** Somebody saved a revision while this one was being changed: both, where they differ, and the choice. */
+/** Somebody saved a revision while this one was being changed: what each changed, and the choice. */
 export function ConflictPanel({ desk, theirs }: Props) {
   const { temperatureUnit } = useUnits();
   const now = useNow();
   const { base, draft } = desk;
   const who = theirs.changedBy?.name ?? 'Somebody';
-  const differences = itemDifferences(theirs.kind, theirs, draft, temperatureUnit);
   const take = () => {
     const undo = desk.takeOver(theirs, `take revision ${theirs.revision}`);
     toast(`You see revision ${theirs.revision} now.`, { action: { word: 'Bring my changes back', take: undo } });
@@ -27,16 +27,18 @@ export function ConflictPanel({ desk, theirs }: Props) {
       <Notice kind="stop">
         {`${who} saved revision ${theirs.revision} ${momentText(theirs.changedAt, now)}, while you were changing revision ${base.revision}. Nothing of yours is lost.`}
       </Notice>
-      {differences.length === 0 ? (
-        <p className="item-quiet">Both say the same.</p>
-      ) : (
-        <DifferenceList
-          differences={differences}
-          before={`Revision ${theirs.revision}`}
-          after="Yours"
-          caption="Where the two differ"
-        />
-      )}
+      <Changes
+        title={`Changed in revision ${theirs.revision}`}
+        differences={itemDifferences(theirs.kind, base, theirs, temperatureUnit)}
+        before={`Revision ${base.revision}`}
+        after={`Revision ${theirs.revision}`}
+      />
+      <Changes
+        title="Changed by you"
+        differences={itemDifferences(theirs.kind, base, draft, temperatureUnit)}
+        before={`Revision ${base.revision}`}
+        after="Yours"
+      />
       <div className="form-actions">
         <Button go onClick={() => desk.keepMine(theirs)}>
           Keep mine on top of theirs
@@ -44,9 +46,24 @@ export function ConflictPanel({ desk, theirs }: Props) {
         <Button onClick={take}>Take theirs</Button>
       </div>
       <p className="item-quiet">
-        Keeping yours makes your changes again on their revision and saves nothing yet. Taking theirs leaves yours under
-        undo.
+        Keeping yours makes your changes again on their revision and saves nothing yet; where both changed the same,
+        yours stands. Taking theirs leaves yours under undo.
       </p>
     </section>
+  );
+}
+
+type ChangesProps = { title: string; differences: readonly Difference[]; before: string; after: string };
+
+function Changes({ title, differences, ...sides }: ChangesProps) {
+  return (
+    <div>
+      <h2>{title}</h2>
+      {differences.length === 0 ? (
+        <p className="item-quiet">Only entries that wait to be mended.</p>
+      ) : (
+        <DifferenceList differences={differences} {...sides} caption={title} />
+      )}
+    </div>
   );
 }

@@ -24,7 +24,8 @@ const FIRST: Record<string, object | undefined> = {
 };
 
 type Amount = {
-  key: string;
+  /** Its name in the file. */
+  member: string;
   label: string;
   measure: Measure;
   range: { min: number; max: number };
@@ -35,7 +36,7 @@ type Amount = {
 /** The number that a rule goes by. */
 const AMOUNTS: Record<string, Amount | undefined> = {
   target: {
-    key: 'soc',
+    member: 'soc',
     label: 'Depart at',
     measure: measureOf('strategy.taper.soc'),
     range: { min: 0, max: 100 },
@@ -43,7 +44,7 @@ const AMOUNTS: Record<string, Amount | undefined> = {
     allowed: '0 to 100 %',
   },
   taper: {
-    key: 'powerKw',
+    member: 'powerKw',
     label: 'Depart below',
     measure: { unit: 'kW', scale: 'plain', decimals: 0, step: 5 },
     range: { min: 0, max: 10_000 },
@@ -65,7 +66,7 @@ export function DepartFields({ path }: { path: string }) {
         options={RULES}
         onChange={(chosen) => put(path, FIRST[chosen], 'depart rule')}
       />
-      {amount && <AmountField {...amount} path={`${path}.${amount.key}`} />}
+      {amount && <AmountField {...amount} path={`${path}.${amount.member}`} />}
     </>
   );
 }
