@@ -10,13 +10,16 @@ const KINDS = { session: sessionStudySchema, trip: tripStudySchema } as const;
  * @throws {StudyError} `NOT_JSON` with the place, else as `parseStudy`
  */
 export function parseStudyText(text: string): Study {
-  let json: unknown;
+  return parseStudy(parseJson(text));
+}
+
+/** @throws {StudyError} `NOT_JSON` with the place */
+export function parseJson(text: string): unknown {
   try {
-    json = JSON.parse(text);
+    return JSON.parse(text) as unknown;
   } catch (error) {
     throw studyError('NOT_JSON', '', 'json', `Cannot read this file as JSON: ${(error as Error).message}`);
   }
-  return parseStudy(json);
 }
 
 /**
