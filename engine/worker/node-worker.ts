@@ -24,7 +24,7 @@ export async function bundleSessionWorker(): Promise<string> {
 }
 
 /**
- * A thread of Node that looks to the pool like a browser's worker, for the tests. A thread that ends by an uncaught error
+ * A thread of Node that looks to the pool like a browser's worker. A thread that ends by an uncaught error
  * says so by an `error` event, as a browser's does.
  *
  * @param program  plain JavaScript of a CommonJS module

@@ -1,4 +1,12 @@
-import type { SessionResult, SessionStudyInput, StudyErrorCode, StudyIssue, ThermalAnalysis } from '../src/index.ts';
+import type {
+  SessionResult,
+  SessionStudyInput,
+  StudyErrorCode,
+  StudyIssue,
+  SweepChunk,
+  SweepPlan,
+  ThermalAnalysis,
+} from '../src/index.ts';
 
 /** What one session run answers: the result, the thermal network under its mean heat, and the time it took [ms]. */
 export type SessionAnswer = { result: SessionResult; thermal: ThermalAnalysis; ms: number };
@@ -16,6 +24,9 @@ export type RunSummary = Pick<SessionResult, 'metrics' | 'energyLedger'>;
 /** Series columns as they cross the border: numbers as one transferred block, the rest as they are. */
 export type PackedAnswer = { answer: SessionAnswer; names: string[]; rows: number; block: ArrayBuffer };
 
+/** Cells of a sweep and the time they took [ms]. */
+export type TimedChunk = SweepChunk & { ms: number };
+
 /** What a worker offers. `onProgress` gets the share done, 0 to 1. */
 export type SessionWorker = {
   run(
@@ -24,4 +35,5 @@ export type SessionWorker = {
     onProgress: ((share: number) => void) | null,
   ): Outcome<PackedAnswer>;
   summarise(studies: SessionStudyInput[], onProgress: ((done: number) => void) | null): Outcome<Outcome<RunSummary>[]>;
+  sweepCells(plan: SweepPlan, indices: Uint32Array): Outcome<TimedChunk>;
 };

@@ -1,7 +1,8 @@
 import * as Comlink from 'comlink';
-import type { SessionStudyInput } from '../src/index.ts';
+import type { SessionStudyInput, SweepPlan } from '../src/index.ts';
 import { unpackAnswer } from './pack-series.ts';
 import type { Outcome, RunOptions, RunSummary, SessionAnswer } from './protocol.ts';
+import { createSweepRun, type ChunkRunner, type SweepRun, type SweepRunOptions } from './sweep-run.ts';
 import { asError, Cancelled, WorkerPool, type Ticket } from './worker-pool.ts';
 
 const CHUNK = 8;
@@ -16,6 +17,8 @@ export type SessionClient = {
   latest(study: SessionStudyInput, options?: RunOptions): Promise<SessionAnswer>;
   /** Headline numbers of many sessions on all workers; entries that fail are errors. `onProgress` gets how many are done. */
   summarise(studies: SessionStudyInput[], onProgress?: (done: number) => void): Ticket<(RunSummary | Error)[]>;
+  /** Runs the cells of a sweep on all workers; live runs go between its chunks. */
+  sweep(plan: SweepPlan, options?: SweepRunOptions): SweepRun;
   close(): void;
 };
 
@@ -30,9 +33,15 @@ export function createSessionClient(makeWorker: () => Worker, size?: number): Se
     run,
     latest: latestOf(run),
     summarise: (studies, onProgress) => summarise(pool, studies, onProgress),
+    sweep: (plan, options) => createSweepRun(chunksOf(pool), plan, options),
     close: () => pool.close(),
   };
 }
+
+const chunksOf = (pool: WorkerPool): ChunkRunner => ({
+  lanes: pool.size,
+  run: (plan, indices) => pool.run((worker) => worker.sweepCells(plan, indices)),
+});
 
 type Waiting = { start: () => void; giveWay: () => void };
 

@@ -8,6 +8,7 @@ import {
   type SessionStudyInput,
 } from '../src/index.ts';
 import { packAnswer } from './pack-series.ts';
+import { sweepCells } from './sweep-cells.ts';
 import type { Outcome, PackedAnswer, RunOptions, RunSummary, SessionAnswer, SessionWorker } from './protocol.ts';
 
 const worker: SessionWorker = {
@@ -25,6 +26,7 @@ const worker: SessionWorker = {
     });
     return { ok: true, value: summaries };
   },
+  sweepCells,
 };
 
 Comlink.expose(worker);

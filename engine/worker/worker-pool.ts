@@ -31,7 +31,8 @@ export class WorkerPool {
   private readonly seats: Seat[] = [];
   private readonly waiting: Job[] = [];
   private readonly makeWorker: () => Worker;
-  private readonly size: number;
+  /** Most workers at once. */
+  readonly size: number;
   private closed = false;
 
   /**
