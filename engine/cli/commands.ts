@@ -1,6 +1,7 @@
 import { readFileSync, writeFileSync } from 'node:fs';
-import { parseStudyText, runStudy, StudyError, studyJsonSchema } from '../src/index.ts';
+import { parseStudyText, runStudy, StudyError, studyJsonSchema, sweepJsonSchema } from '../src/index.ts';
 import { readArguments, USAGE, UsageError, type Command } from './arguments.ts';
+import { checkFile } from './check-file.ts';
 import { seriesCsv } from './series-csv.ts';
 import { summary } from './summary.ts';
 
@@ -18,7 +19,7 @@ export function runCommand(args: string[], streams: Streams): number {
     carryOut(readArguments(args), streams);
     return 0;
   } catch (error) {
-    streams.err(`${describe(error as Error)}\n`);
+    streams.err(`${describeError(error as Error)}\n`);
     return FAILED;
   }
 }
@@ -28,11 +29,9 @@ function carryOut(command: Command, { out }: Streams): void {
     case 'help':
       return out(USAGE);
     case 'schema':
-      return out(`${JSON.stringify(studyJsonSchema(), null, 2)}\n`);
-    case 'check': {
-      const study = parseStudyText(read(command.file));
-      return out(`Valid: a ${study.kind} study${study.title ? `, “${study.title}”` : ''}.\n`);
-    }
+      return out(`${JSON.stringify(command.of === 'sweep' ? sweepJsonSchema() : studyJsonSchema(), null, 2)}\n`);
+    case 'check':
+      return out(checkFile(read(command.file)));
     case 'run':
       return run(command, out);
   }
@@ -59,7 +58,8 @@ function isFileError(error: unknown): error is NodeJS.ErrnoException {
   return error instanceof Error && 'syscall' in error;
 }
 
-function describe(error: Error): string {
+/** An error as the command line writes it. */
+export function describeError(error: Error): string {
   if (error instanceof UsageError) return `${error.message}\n\n${USAGE.trimEnd()}`;
   if (isFileError(error)) return `Cannot use ${error.path ?? 'the file'}: ${error.message}`;
   return error instanceof StudyError ? error.message : `Unexpected: ${error.stack ?? error.message}`;

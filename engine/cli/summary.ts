@@ -1,6 +1,6 @@
 import type { SessionResult, Study, StudyResult, TripResult } from '../src/index.ts';
 
-const CAUTION =
+export const CAUTION =
   'A simulation is not a test. Results are estimates for engineering study; they do not replace the cell maker’s limits,\n' +
   'abuse testing, functional-safety work or the judgement of qualified engineers.';
 
