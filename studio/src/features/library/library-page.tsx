@@ -3,6 +3,7 @@ import './library.css';
 import { useCallback } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import { AsyncView } from '../../components/async-view.tsx';
+import { Caution } from '../../components/caution.tsx';
 import { PageTitle } from '../../components/page-title.tsx';
 import { useWorkspace } from '../../lib/session/use-workspace.ts';
 import { useLibraryList } from './api/list-library.ts';
@@ -63,6 +64,7 @@ export function LibraryPage() {
           </>
         )}
       </AsyncView>
+      <Caution short invented />
       <p className="reg-foot">
         <button type="button" className="lnk" onClick={() => setFilters({ ...filters, archived: !filters.archived })}>
           {filters.archived ? 'Show what is in use' : 'Show the archive'}

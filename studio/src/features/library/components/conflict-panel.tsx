@@ -3,11 +3,11 @@ import { Button } from '../../../components/button.tsx';
 import { DifferenceList } from '../../../components/difference-list.tsx';
 import { Notice } from '../../../components/notice.tsx';
 import { toast } from '../../../components/toasts.tsx';
-import { momentText } from '../../../lib/moment-text.ts';
+import { formatAgo } from '../../../lib/moments.ts';
 import type { Difference } from '../../../lib/study-differences.ts';
 import { useUnits } from '../../../lib/units.ts';
+import { useNow } from '../../../lib/use-now.ts';
 import type { ItemDesk } from '../hooks/use-item-draft.ts';
-import { useNow } from '../hooks/use-now.ts';
 import { itemDifferences } from '../model/item-content.ts';
 
 type Props = { desk: ItemDesk; theirs: LibraryItem };
@@ -25,7 +25,7 @@ export function ConflictPanel({ desk, theirs }: Props) {
   return (
     <section className="conflict" aria-label="Two people changed this part">
       <Notice kind="stop">
-        {`${who} saved revision ${theirs.revision} ${momentText(theirs.changedAt, now)}, while you were changing revision ${base.revision}. Nothing of yours is lost.`}
+        {`${who} saved revision ${theirs.revision} ${formatAgo(theirs.changedAt, new Date(now))}, while you were changing revision ${base.revision}. Nothing of yours is lost.`}
       </Notice>
       <Changes
         title={`Changed in revision ${theirs.revision}`}

@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import type { LibraryItem } from '../../../../../server/src/contract/library.ts';
 import { TitleBlock } from '../../../components/title-block.tsx';
+import { TitleInput } from '../../../components/title-input.tsx';
 import { kindWords } from '../model/kinds.ts';
 import { WhoWhen } from './who-when.tsx';
 
@@ -39,20 +40,17 @@ function ChangeWords({ isChanged, isKept }: { isChanged: boolean; isKept: boolea
 }
 
 function NameField({ name, readOnly, onName }: { name: string; readOnly: boolean; onName: (name: string) => void }) {
-  if (readOnly) return <h1 className="item-name">{name}</h1>;
+  if (readOnly) return <h1>{name}</h1>;
   return (
     <>
       <h1 className="unseen">{name || 'Without a name'}</h1>
-      <input
-        className="item-name"
-        aria-label="Name of the part"
-        aria-invalid={name.trim() === '' ? true : undefined}
+      <TitleInput
+        label="Name of the part"
+        value={name}
         placeholder="Without a name"
         maxLength={200}
-        autoComplete="off"
-        spellCheck={false}
-        value={name}
-        onChange={(event) => onName(event.target.value)}
+        isWrong={name.trim() === ''}
+        onText={onName}
       />
     </>
   );
