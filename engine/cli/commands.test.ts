@@ -4,7 +4,7 @@ import { join } from 'node:path';
 import { spawnSync } from 'node:child_process';
 import { fileURLToPath } from 'node:url';
 import { describe, expect, test } from 'vitest';
-import type { SessionResult } from '../src/index.ts';
+import type { SessionResult, TuneResult } from '../src/index.ts';
 import { runCommand } from './commands.ts';
 
 const EXAMPLES = fileURLToPath(new URL('../../examples/', import.meta.url));
@@ -17,7 +17,11 @@ function voltiplano(...args: string[]) {
   return { code, out, err };
 }
 
-const exampleFiles = readdirSync(EXAMPLES).filter((file) => file.endsWith('.json'));
+const formatOf = (file: string) =>
+  (JSON.parse(readFileSync(join(EXAMPLES, file), 'utf8')) as { format: string }).format;
+const jsonFiles = readdirSync(EXAMPLES).filter((file) => file.endsWith('.json'));
+const exampleFiles = jsonFiles.filter((file) => formatOf(file) === 'voltiplano/study');
+const tuneFiles = jsonFiles.filter((file) => formatOf(file) === 'voltiplano/tune');
 
 describe('run', () => {
   test.each(exampleFiles)('examples/%s runs and its README says what it shows', (file) => {
@@ -68,6 +72,41 @@ describe('run', () => {
     expect(run.status).toBe(0);
     expect(run.stdout).toContain('10–80 %');
   }, 30_000);
+});
+
+describe('tune', () => {
+  test('there are requests among the examples', () => expect(tuneFiles.length).toBeGreaterThan(0));
+
+  test.each(tuneFiles)(
+    'examples/%s finds a taper and its README says what it shows',
+    (file) => {
+      expect(readFileSync(join(EXAMPLES, 'README.md'), 'utf8')).toContain(`\`${file}\``);
+      const json = join(mkdtempSync(join(tmpdir(), 'voltiplano-')), 'out.json');
+      const { code, out, err } = voltiplano('tune', join(EXAMPLES, file), '--json', json);
+      expect({ code, err }).toEqual({ code: 0, err: '' });
+      expect(out).toContain('better than the present one');
+      expect(out).toContain('A simulation is not a test.');
+      const result = JSON.parse(readFileSync(json, 'utf8')) as TuneResult;
+      expect(result.verdict).toBe('tuned');
+      expect(result.tradeOff!.points.length).toBeGreaterThanOrEqual(6);
+      expect(out).toContain(`${result.goal.tuned!.toFixed(2)} min`);
+    },
+    120_000,
+  );
+
+  test('check reads requests, and schema tune prints the JSON Schema that is kept in engine/schema', () => {
+    expect(voltiplano('check', join(EXAMPLES, tuneFiles[0])).out).toMatch(/^Valid: a request to tune, “/);
+    const kept = readFileSync(fileURLToPath(new URL('../schema/tune.schema.json', import.meta.url)), 'utf8');
+    expect(JSON.parse(voltiplano('schema', 'tune').out)).toEqual(JSON.parse(kept));
+  });
+
+  test('a study is no request: exit code 2, and the field', () => {
+    expect(voltiplano('tune', WARM)).toEqual({
+      code: 2,
+      out: '',
+      err: 'Not a tuning: format must be "voltiplano/tune", but is "voltiplano/study"\n',
+    });
+  });
 });
 
 describe('errors end with exit code 2 and say what is wrong', () => {

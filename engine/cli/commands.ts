@@ -1,13 +1,22 @@
 import { readFileSync, writeFileSync } from 'node:fs';
-import { parseStudyText, runStudy, StudyError, studyJsonSchema, sweepJsonSchema } from '../src/index.ts';
+import {
+  parseStudyText,
+  runStudy,
+  StudyError,
+  studyJsonSchema,
+  sweepJsonSchema,
+  tuneJsonSchema,
+} from '../src/index.ts';
 import { readArguments, USAGE, UsageError, type Command } from './arguments.ts';
 import { checkFile } from './check-file.ts';
 import { seriesCsv } from './series-csv.ts';
 import { summary } from './summary.ts';
+import { tuneFromText, tuneSummary } from './tune-command.ts';
 
 export type Streams = { out: (text: string) => void; err: (text: string) => void };
 
 const FAILED = 2;
+const SCHEMAS = { study: studyJsonSchema, sweep: sweepJsonSchema, tune: tuneJsonSchema };
 
 /**
  * Carries one command line out.
@@ -29,11 +38,13 @@ function carryOut(command: Command, { out }: Streams): void {
     case 'help':
       return out(USAGE);
     case 'schema':
-      return out(`${JSON.stringify(command.of === 'sweep' ? sweepJsonSchema() : studyJsonSchema(), null, 2)}\n`);
+      return out(`${JSON.stringify(SCHEMAS[command.of](), null, 2)}\n`);
     case 'check':
       return out(checkFile(read(command.file)));
     case 'run':
       return run(command, out);
+    case 'tune':
+      return tune(command, out);
   }
 }
 
@@ -43,6 +54,12 @@ function run({ file, json, csv, everyS, rtol }: Command & { name: 'run' }, out: 
   if (json !== undefined) write(json, `${JSON.stringify(result)}\n`, out);
   if (csv !== undefined) write(csv, seriesCsv(result), out);
   if (json !== '-' && csv !== '-') out(summary(study, result));
+}
+
+function tune({ file, json }: Command & { name: 'tune' }, out: Streams['out']): void {
+  const result = tuneFromText(read(file));
+  if (json !== undefined) write(json, `${JSON.stringify(result)}\n`, out);
+  if (json !== '-') out(tuneSummary(result));
 }
 
 function read(file: string): string {

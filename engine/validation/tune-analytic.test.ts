@@ -29,7 +29,7 @@ const minutes = (seconds: number) => seconds / 60;
 
 describe('constant resistance, linear rest voltage', () => {
   test.each([1, 2, 3, 5, 8])(
-    '%i ledges under a voltage bound take the closed form’s least time within 0.5 %%',
+    '%i ledges under a voltage bound take no more than 1.005 times the closed form’s least time',
     (count) => {
       const request = tuning(linear(), {
         shape: { kind: 'ledges', count },

@@ -13,8 +13,6 @@ type Kind = {
   scale: number;
   /** Room left to the bound, so that other tolerances and grids than the tuning's keep it too. */
   backOff: number;
-  /** A state, whose course has no corners, so that a peak between two looks can be told from three of them. */
-  state?: true;
   read(system: SessionSystem, y: ArrayLike<number>): number;
 };
 
@@ -26,7 +24,7 @@ const KINDS: Record<BoundName, Kind> = {
     digits: 1,
     scale: 1,
     backOff: 2e-3,
-    state: true,
+
     read: ({ pack }, y) => pack.hottestCore(y),
   },
   hottestSurfaceMaxC: {
@@ -34,7 +32,7 @@ const KINDS: Record<BoundName, Kind> = {
     digits: 1,
     scale: 1,
     backOff: 2e-3,
-    state: true,
+
     read: ({ pack }) => pack.hottestSurface,
   },
   lowestAnodeMinMv: {
@@ -51,7 +49,7 @@ const KINDS: Record<BoundName, Kind> = {
     backOff: 5e-6,
     read: ({ pack, charge }) => pack.highestCellV(charge.current),
   },
-  inletMaxC: { sign: 1, digits: 1, scale: 1, backOff: 2e-3, state: true, read: ({ pack }) => pack.inletC },
+  inletMaxC: { sign: 1, digits: 1, scale: 1, backOff: 2e-3, read: ({ pack }) => pack.inletC },
   stationPowerMaxKw: { sign: 1, digits: 1, scale: 5, backOff: 5e-3, read: stationKw },
   stationCurrentMaxA: { sign: 1, digits: 1, scale: 10, backOff: 5e-3, read: ({ charge }) => charge.stationCurrent },
 };

@@ -47,7 +47,8 @@ export class BoundWatch implements SessionObserver {
   private beforeS = Number.NaN;
   private lastShare = 0;
   private lastCode = -1;
-  /** Whether the stretch between the last two samples was under one limit. */
+  private lastPiece = -1;
+  /** Whether the last two samples stood under one limit in one piece. */
   private smooth = false;
   private lastSoc = 0;
   private readonly last: Float64Array;
@@ -81,20 +82,23 @@ export class BoundWatch implements SessionObserver {
     const { soc } = system.pack;
     const piece = this.pieceAt(soc);
     const share = this.shareAt(piece, soc);
+    // Where a limit hands over, or a slope has a point, the course has a corner and is not one parabola.
+    const same = code === this.lastCode && piece === this.lastPiece && this.lastS < t;
+    const goesOn = same && this.smooth;
     if (t > this.lastS) this.heldS[piece * limitCodes.length + code] += t - this.lastS;
     const { specs, last, before } = this;
     for (let b = 0; b < specs.length; b++) {
       const value = specs[b].sign * specs[b].read(system, seen);
       this.note(b, share, value, t, soc);
-      const peak = specs[b].state === true && last[b] > value && last[b] > before[b];
-      if (peak && this.smooth && code === this.lastCode) this.notePeak(b, t, value);
+      if (goesOn && last[b] > value && last[b] > before[b]) this.notePeak(b, t, value);
       before[b] = last[b];
       last[b] = value;
     }
-    this.smooth = code === this.lastCode && this.lastS < t;
+    this.smooth = same;
     this.beforeS = this.lastS;
     this.lastS = t;
     this.lastCode = code;
+    this.lastPiece = piece;
     this.lastShare = share;
     this.lastSoc = soc;
   }
@@ -102,6 +106,7 @@ export class BoundWatch implements SessionObserver {
   pass(step: Step, from: number, to: number): void {
     const { pack } = this.solution!.system;
     const { goal } = this;
+    if (this.pieces.kind === 'slope') this.lookAtPoints(step, from, to);
     if (goal.kind === 'most-energy') {
       const s = goal.minutes * 60;
       // Held after the end: the latest reading stands until the goal's time is passed.
@@ -127,6 +132,26 @@ export class BoundWatch implements SessionObserver {
     return piece;
   }
 
+  /** A slope's points are corners, and may be the worst of a stretch: they are looked at themselves. */
+  private lookAtPoints(step: Step, from: number, to: number): void {
+    const solution = this.solution!;
+    const { system, seen } = solution;
+    const [low, high] = [step.dense(0, from), step.dense(0, to)];
+    const inside = this.pieces.soc.findIndex((soc) => system.pack.zAt(soc) > low);
+    for (let p = inside; p >= 0 && p < this.pieces.soc.length; p++) {
+      const z = system.pack.zAt(this.pieces.soc[p]);
+      if (!(z < high)) break;
+      const t = crossing(step, z, from, to);
+      solution.look(t);
+      for (let b = 0; b < this.specs.length; b++) {
+        const value = this.specs[b].sign * this.specs[b].read(system, seen);
+        for (const piece of [p, p + 1])
+          this.note(b, piece * this.shares + (piece === p ? this.shares - 1 : 0), value, t, this.pieces.soc[p]);
+      }
+    }
+    solution.look(to);
+  }
+
   private shareAt(piece: number, soc: number): number {
     const [from, to] = [this.ends[piece], this.ends[piece + 1]];
     const share = Math.floor((this.shares * (soc - from)) / Math.max(1e-9, to - from));
@@ -145,7 +170,8 @@ export class BoundWatch implements SessionObserver {
   private notePeak(b: number, t: number, value: number): void {
     const h0 = this.lastS - this.beforeS;
     const h1 = t - this.lastS;
-    if (!(h1 > 0)) return;
+    // Looks that all but coincide tell rounding, not curvature.
+    if (!(Math.min(h0, h1) > 0.1 * Math.max(h0, h1))) return;
     const d0 = (this.last[b] - this.before[b]) / h0;
     const d1 = (value - this.last[b]) / h1;
     const curve = (d1 - d0) / (h0 + h1);

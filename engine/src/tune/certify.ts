@@ -22,6 +22,8 @@ export function* certify(problem: Problem, found: Trial, effort: Effort): Genera
   let held = problem;
   let trial = yield* tryCurve(problem, onGrid(problem.space, found.curve), effort);
   for (let round = 0; round < ROUNDS; round++) {
+    // Under a wider back-off the same taper counts as further out.
+    if (round > 0) trial = yield* tryCurve(held, trial.curve, effort);
     const { best, last } = yield* improve(held, trial, effort, { rounds: 4, radius: 0.05, valuesOnly: true });
     const end = best !== null && best.cost < last.cost ? best : last;
     trial = yield* tryCurve(held, cutValues(problem.space, end.curve), effort);

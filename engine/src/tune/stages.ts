@@ -6,6 +6,8 @@ import type { Curve } from './taper-space.ts';
 import { tryCurve, type Effort, type Problem, type Tick, type Trial } from './trial.ts';
 
 const CAPS = 7;
+/** Places at which a part more is tried. Slopes have more ways to go wrong than ledges. */
+const INSERTIONS = { ledges: 1, slope: 3 };
 const ROUNDS = 24;
 
 /** How far a search has come: a share of its whole, 0 to 1, and what it is at. */
@@ -29,7 +31,7 @@ export function* tuneInStages(
   const starts = new StartCurves(problem.space, envelope);
   let best: Trial | null = null;
   for (let n = problem.space.kind === 'ledges' ? 1 : 2; n <= parts; n++) {
-    const curves: Curve[] = best === null ? [] : listOf(starts.insertion(best.curve));
+    const curves: Curve[] = best === null ? [] : starts.insertions(best.curve, INSERTIONS[problem.space.kind]);
     curves.push(...known.filter((curve) => curve.value.length === n));
     const ends = [yield* fromEnvelope(problem, starts, n, effort)];
     for (const curve of curves) ends.push(yield* search(problem, yield* tryCurve(problem, curve, effort), effort));
@@ -43,8 +45,6 @@ export function* tuneInStages(
   }
   return best;
 }
-
-const listOf = (curve: Curve | null): Curve[] => (curve === null ? [] : [curve]);
 
 /** Ends that keep the bounds first, then the cheaper. */
 const byCost = (a: Trial, b: Trial): number => Number(a.worst > NEARLY) - Number(b.worst > NEARLY) || a.cost - b.cost;
@@ -60,7 +60,11 @@ export function isBetter(one: Trial, than: Trial | null): boolean {
 /** The envelope's best taper at the level of cut-off that runs best, improved. */
 function* fromEnvelope(problem: Problem, starts: StartCurves, n: number, effort: Effort): Generator<Tick, Trial[]> {
   const trials: Trial[] = [];
-  for (const cap of starts.caps(CAPS)) trials.push(yield* tryCurve(problem, starts.best(n, cap), effort));
+  for (const cap of starts.caps(CAPS)) {
+    const curve = starts.best(n, cap);
+    if (curve !== null) trials.push(yield* tryCurve(problem, curve, effort));
+  }
+  if (trials.length === 0) return [];
   const price = 0.1 * Math.min(...trials.map((trial) => Math.abs(trial.cost)));
   const merit = (trial: Trial) => trial.cost + price * Math.max(0, trial.worst);
   const start = trials.reduce((best, trial) => (merit(trial) < merit(best) ? trial : best));

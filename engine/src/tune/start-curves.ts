@@ -1,11 +1,16 @@
 import type { Envelope } from './envelope.ts';
+import { SlopeProgram } from './slope-program.ts';
 import type { Curve, TaperSpace } from './taper-space.ts';
+
+/** Nodes between two places at which a part is put in. */
+const APART = 12;
 
 /** Where to begin: tapers that are best for an envelope, without any run. */
 export class StartCurves {
   /** What a value may be at each node: the envelope, falling where the taper must. */
   private readonly room: number[];
   private readonly step: number;
+  private readonly programs = new Map<number, SlopeProgram>();
 
   constructor(
     private readonly space: TaperSpace,
@@ -28,7 +33,7 @@ export class StartCurves {
   }
 
   /** The fastest taper of `parts` ledges or points under the envelope cut off at `cap`, by dynamic programming over the nodes. */
-  best(parts: number, cap: number): Curve {
+  best(parts: number, cap: number): Curve | null {
     return this.space.kind === 'ledges' ? this.bestLedges(parts, cap) : this.bestSlope(parts, cap);
   }
 
@@ -49,40 +54,46 @@ export class StartCurves {
     };
   }
 
-  private bestSlope(points: number, cap: number): Curve {
-    const last = this.envelope.soc.length - 1;
-    const wide = Math.max(1, Math.ceil(this.space.width / this.step - 1e-9));
-    const at = (i: number) => Math.min(cap, this.room[i]);
-    const cost = (a: number, b: number) => {
-      const line = (i: number) => at(a) + ((at(b) - at(a)) * (i - a)) / (b - a);
-      let over = 0;
-      for (let i = a; i <= b; i++) over = Math.max(over, line(i) / at(i) - 1);
-      return this.timeOf(a, b, line) * (1 + 5 * over);
-    };
-    const pieces = Math.min(points - 1, Math.max(1, Math.floor(last / wide)));
-    const ends = cheapestPath(last, pieces, wide, cost);
-    return { soc: ends.map((i) => this.envelope.soc[i]), value: ends.map(at) };
+  /** Laid out once for each level; more points take up where fewer left off. */
+  private bestSlope(points: number, cap: number): Curve | null {
+    let program = this.programs.get(cap);
+    if (program === undefined) {
+      const wide = Math.max(1, Math.ceil(this.space.width / this.step - 1e-9));
+      const time = (node: number, value: number) => this.timeOf(node, node + 1, () => value);
+      const ground = { soc: this.envelope.soc, room: this.room, wide, monotone: this.space.monotone, time };
+      this.programs.set(cap, (program = new SlopeProgram(ground, cap)));
+    }
+    return program.best(points);
   }
 
-  /** The curve with one part more and the same values everywhere, where the envelope says that it helps most; null where none fits. */
-  insertion({ soc, value }: Curve): Curve | null {
+  /**
+   * The curve with one part more and the same values everywhere, at the places where the envelope says that it helps most, the
+   * best first; as many as fit and are asked for, apart from each other.
+   */
+  insertions(curve: Curve, count: number): Curve[] {
     const { kind, width, hi } = this.space;
-    const ends = kind === 'ledges' ? [...soc, hi] : soc;
-    let found: { gain: number; curve: Curve } | null = null;
+    const ends = kind === 'ledges' ? [...curve.soc, hi] : curve.soc;
+    const places: { gain: number; i: number; k: number }[] = [];
     for (const [i, s] of this.envelope.soc.entries()) {
       const k = ends.findIndex((end, j) => s >= end + width - 1e-9 && s <= (ends[j + 1] ?? -1) - width + 1e-9);
       if (k < 0) continue;
-      const curve =
-        kind === 'ledges'
-          ? {
-              soc: [...soc.slice(0, k + 1), s, ...soc.slice(k + 1)],
-              value: [...value.slice(0, k + 1), ...value.slice(k)],
-            }
-          : { soc: [...soc.slice(0, k + 1), s, ...soc.slice(k + 1)], value: inserted(soc, value, k, s) };
-      const gain = kind === 'ledges' ? this.ledgeGain(ends, value, k, i) : this.pointGain(soc, value, k, i);
-      if (found === null || gain > found.gain) found = { gain, curve };
+      const gain = kind === 'ledges' ? this.ledgeGain(ends, curve.value, k, i) : this.pointGain(curve, k, i);
+      places.push({ gain, i, k });
     }
-    return found?.curve ?? null;
+    places.sort((a, b) => b.gain - a.gain || a.i - b.i);
+    const taken: typeof places = [];
+    for (const place of places) {
+      if (taken.length === count) break;
+      if (taken.every(({ i }) => Math.abs(i - place.i) >= APART)) taken.push(place);
+    }
+    return taken.map(({ i, k }) => this.inserted(curve, k, this.envelope.soc[i]));
+  }
+
+  private inserted({ soc, value }: Curve, k: number, s: number): Curve {
+    const share = (s - soc[k]) / ((soc[k + 1] ?? s + 1) - soc[k]);
+    const between = this.space.kind === 'ledges' ? value[k] : value[k] + share * (value[k + 1] - value[k]);
+    const put = (list: number[], entry: number) => [...list.slice(0, k + 1), entry, ...list.slice(k + 1)];
+    return { soc: put(soc, s), value: put(value, between) };
   }
 
   private ledgeGain(ends: number[], value: number[], k: number, i: number): number {
@@ -93,7 +104,7 @@ export class StartCurves {
     return this.timeOf(a, b, () => Math.min(value[k], level(a, b))) - parts;
   }
 
-  private pointGain(soc: number[], value: number[], k: number, i: number): number {
+  private pointGain({ soc, value }: Curve, k: number, i: number): number {
     const [a, b] = [this.node(soc[k]), this.node(soc[k + 1])];
     const before = (j: number) => value[k] + ((value[k + 1] - value[k]) * (j - a)) / Math.max(1, b - a);
     const hat = (j: number) => (j <= i ? (j - a) / Math.max(1, i - a) : (b - j) / Math.max(1, b - i));
@@ -127,12 +138,6 @@ export class StartCurves {
     }
     return sum;
   }
-}
-
-function inserted(soc: number[], value: number[], k: number, s: number): number[] {
-  const share = (s - soc[k]) / (soc[k + 1] - soc[k]);
-  const between = value[k] + share * (value[k + 1] - value[k]);
-  return [...value.slice(0, k + 1), between, ...value.slice(k + 1)];
 }
 
 /** Nodes of the cheapest way from node 0 to the last in `pieces` pieces, each at least `wide` nodes long. */

@@ -38,8 +38,8 @@ export type Tick = void;
 
 /** Share of the session's whole length in the cost. */
 const REST = 1e-4;
-/** No output grid: only what the watch sees is asked for. */
-const NO_GRID_S = 1e9;
+/** Looks this far apart tell a peak from a parabola through three of them, also where the anode's potential steps [s]. */
+const LOOK_S = 5;
 
 /** Counts what a tuning costs. */
 export type Effort = { runs: number; evaluations: number };
@@ -85,7 +85,7 @@ export function* tryCurve(problem: Problem, curve: Curve, effort: Effort): Gener
 function runQuietly(study: SessionStudy, watch: BoundWatch, effort: Effort): number {
   effort.runs++;
   try {
-    const { result, statistics } = simulateSession(study, { everyS: NO_GRID_S, observer: watch });
+    const { result, statistics } = simulateSession(study, { everyS: LOOK_S, observer: watch });
     effort.evaluations += statistics.evaluations;
     return result.metrics.endMin;
   } catch (error) {
