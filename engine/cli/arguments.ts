@@ -20,9 +20,10 @@ export const USAGE = `Usage:
       Says whether a study is valid, and if not what is wrong, where, and the value found.
   voltiplano schema [study|sweep|tune]
       Prints the JSON Schema of study files, of sweep files, or of requests to tune.
-  voltiplano sweep SWEEP.json [--json OUT.json|-] [--csv OUT.csv|-] [--jobs N]
+  voltiplano sweep SWEEP.json [--json OUT.json|-] [--csv OUT.csv|-] [--jobs N] [--keep FILE]
       Runs a sweep, a sensitivity or a spread on N threads. Progress goes to standard error.
-STUDY.json and REQUEST.json may be - for standard input. Exit code 0, or 2 with the error on standard error.
+      Finished cells are kept in FILE; started again with the same FILE, it carries on from them.
+STUDY.json, SWEEP.json and REQUEST.json may be - for standard input. Exit code 0, or 2 with the error on standard error.
 `;
 
 const OPTIONS = {

@@ -4,6 +4,7 @@ import {
   runStudy,
   StudyError,
   studyJsonSchema,
+  SweepDataError,
   sweepJsonSchema,
   tuneJsonSchema,
 } from '../src/index.ts';
@@ -79,5 +80,7 @@ function isFileError(error: unknown): error is NodeJS.ErrnoException {
 export function describeError(error: Error): string {
   if (error instanceof UsageError) return `${error.message}\n\n${USAGE.trimEnd()}`;
   if (isFileError(error)) return `Cannot use ${error.path ?? 'the file'}: ${error.message}`;
-  return error instanceof StudyError ? error.message : `Unexpected: ${error.stack ?? error.message}`;
+  return error instanceof StudyError || error instanceof SweepDataError
+    ? error.message
+    : `Unexpected: ${error.stack ?? error.message}`;
 }

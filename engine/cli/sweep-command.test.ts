@@ -4,7 +4,7 @@ import { join } from 'node:path';
 import { spawnSync } from 'node:child_process';
 import { fileURLToPath } from 'node:url';
 import { describe, expect, test } from 'vitest';
-import { CELL, parseSweepText, runCells } from '../src/index.ts';
+import { CELL, decodeSweep, encodeSweep, engineVersion, parseSweepText, runCells, SweepResult } from '../src/index.ts';
 import { runCommand } from './commands.ts';
 import { sweepCommand } from './sweep-command.ts';
 
@@ -120,6 +120,26 @@ describe('sweep', () => {
     ];
     expect(two.out).toBe(one.out);
   }, 30_000);
+
+  test('--keep carries on from what was finished, and refuses results of another sweep', async () => {
+    const kept = join(folder, 'kept.vps');
+    const plan = parseSweepText(readFileSync(small(), 'utf8'));
+    const half = new SweepResult(plan);
+    half.merge(runCells(plan, [1, 2]));
+    // No run gives this: it can only come from the file.
+    half.column('endMin')[1] = 12345;
+    writeFileSync(kept, encodeSweep(half, engineVersion));
+    const { out, err } = await sweep(small(), '--keep', kept, '--csv', '-');
+    expect(err).toMatch(/4 of 4 cells, 2 failed\n$/);
+    const [header, ...rows] = out.trimEnd().split('\n');
+    const endMin = rows.map((row) => row.split(',')[header.split(',').indexOf('endMin')]);
+    expect(endMin[1]).toBe('12345');
+    expect(Number(endMin[3])).toBeGreaterThan(10);
+    expect(decodeSweep(readFileSync(kept), plan, engineVersion).pending()).toHaveLength(0);
+    const other = await sweep(join(EXAMPLES, 'cold-arrival.json'), '--keep', kept);
+    expect(other.code).toBe(2);
+    expect(other.err).toMatch(/^These results belong to another sweep/);
+  });
 
   test.each([
     ['no file', [], /sweep needs a sweep file/],

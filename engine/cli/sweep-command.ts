@@ -2,20 +2,26 @@ import { readFileSync, writeFileSync } from 'node:fs';
 import { availableParallelism } from 'node:os';
 import { parseArgs } from 'node:util';
 import { parseSweepText, runCells, type SweepPlan, type SweepResult } from '../src/index.ts';
-import { createSessionClient, createSweepRun, type ChunkRunner } from '../worker/index.ts';
+import { createSessionClient, createSweepRun, type ChunkRunner, type SweepRunOptions } from '../worker/index.ts';
 import { bundleSessionWorker, startNodeWorker } from '../worker/node-worker.ts';
 import { UsageError } from './arguments.ts';
 import { describeError, type Streams } from './commands.ts';
+import { keptIn } from './kept-sweep.ts';
 import { progressTeller } from './sweep-progress.ts';
 import { sweepCsv, sweepJson } from './sweep-output.ts';
 import { sweepSummary } from './sweep-summary.ts';
 
-const OPTIONS = { json: { type: 'string' }, csv: { type: 'string' }, jobs: { type: 'string' } } as const;
+const OPTIONS = {
+  json: { type: 'string' },
+  csv: { type: 'string' },
+  jobs: { type: 'string' },
+  keep: { type: 'string' },
+} as const;
 /** Up to here starting threads takes longer than they save. */
 const FEW_CELLS = 200;
 const MOST_JOBS = 256;
 
-type SweepArguments = { file: string; json?: string; csv?: string; jobs?: number };
+type SweepArguments = { file: string; json?: string; csv?: string; jobs?: number; keep?: string };
 
 /**
  * Carries `voltiplano sweep …` out; progress goes to `err`.
@@ -25,9 +31,11 @@ type SweepArguments = { file: string; json?: string; csv?: string; jobs?: number
  */
 export async function sweepCommand(args: string[], streams: Streams): Promise<number> {
   try {
-    const { file, json, csv, jobs } = readSweepArguments(args);
+    const { file, json, csv, jobs, keep } = readSweepArguments(args);
     const plan = parseSweepText(readFileSync(file === '-' ? 0 : file, 'utf8'));
-    const result = await runAll(plan, jobs ?? (plan.size <= FEW_CELLS ? 1 : availableParallelism()), streams.err);
+    const progress = progressTeller(streams.err);
+    const options = keep === undefined ? { onProgress: progress } : keptIn(keep, plan, progress);
+    const result = await runAll(plan, jobs ?? (plan.size <= FEW_CELLS ? 1 : availableParallelism()), options);
     if (json !== undefined) write(json, sweepJson(result), streams);
     if (csv !== undefined) write(csv, sweepCsv(result), streams);
     if (json !== '-' && csv !== '-') streams.out(sweepSummary(result));
@@ -43,9 +51,9 @@ function readSweepArguments(args: string[]): SweepArguments {
   const [file, ...rest] = positionals;
   if (file === undefined) throw new UsageError('sweep needs a sweep file, or - for standard input.');
   if (rest.length > 0) throw new UsageError(`sweep takes one sweep file, but was given ${rest.length + 1}.`);
-  const { json, csv, jobs } = values;
+  const { json, csv, jobs, keep } = values;
   if (json === '-' && csv === '-') throw new UsageError('--json and --csv cannot both go to standard output.');
-  return { file, json, csv, ...(jobs === undefined ? {} : { jobs: wholeJobs(jobs) }) };
+  return { file, json, csv, keep, ...(jobs === undefined ? {} : { jobs: wholeJobs(jobs) }) };
 }
 
 function wholeJobs(text: string): number {
@@ -67,13 +75,12 @@ function write(file: string, text: string, { out }: Streams): void {
   else writeFileSync(file, text);
 }
 
-async function runAll(plan: SweepPlan, jobs: number, err: Streams['err']): Promise<SweepResult> {
-  const onProgress = progressTeller(err);
-  if (jobs === 1) return createSweepRun(inProcess, plan, { onProgress }).finished;
+async function runAll(plan: SweepPlan, jobs: number, options: SweepRunOptions): Promise<SweepResult> {
+  if (jobs === 1) return createSweepRun(inProcess, plan, options).finished;
   const program = await bundleSessionWorker();
   const client = createSessionClient(() => startNodeWorker(program), jobs);
   try {
-    return await client.sweep(plan, { onProgress }).finished;
+    return await client.sweep(plan, options).finished;
   } finally {
     client.close();
   }

@@ -46,6 +46,7 @@ export type { TuneProgress } from './tune/work-plan.ts';
 export type * from './tune/tune-result.ts';
 export { roomAboveTaper, type RoomAboveTaper } from './tune/room-above-taper.ts';
 export { convertTaper, type ConvertedTaper } from './tune/convert-taper.ts';
+export { engineVersion } from './engine-version.ts';
 export { parseSweep, parseSweepText } from './sweep/parse-sweep.ts';
 export { MOST_CELLS, sweepJsonSchema, sweepParts, type SweepPart, type SweepStudyInput } from './study/sweep-schema.ts';
 export { studyInputs, type StudyInput } from './sweep/input-path.ts';
@@ -70,6 +71,7 @@ export { curveSocPercent, endReasons, sweepMetrics, type SweepMetric } from './s
 export { CELL, failedChunk, runCells, type CellFailure, type SweepChunk } from './sweep/run-cells.ts';
 export { SweepResult } from './sweep/sweep-result.ts';
 export { decodeSweep, encodeSweep, SweepDataError, type SweepDataCode } from './sweep/sweep-bytes.ts';
-export { limitBorders, type LimitBorder, type Slice } from './sweep/limit-borders.ts';
+export { limitBorders, type LimitBorder } from './sweep/limit-borders.ts';
+export { sliceValues, type Slice } from './sweep/slice.ts';
 export { sensitivityRows, type SensitivityRow } from './sweep/sensitivity.ts';
 export { curveBands, metricBand, spreadPercentiles, type Band } from './sweep/spread-bands.ts';

@@ -40,7 +40,7 @@ export function createSessionClient(makeWorker: () => Worker, size?: number): Se
 
 const chunksOf = (pool: WorkerPool): ChunkRunner => ({
   lanes: pool.size,
-  run: (plan, indices) => pool.run((worker) => worker.sweepCells(plan, indices)),
+  run: (plan, indices) => pool.run((worker) => worker.sweepCells(plan, indices), true),
 });
 
 type Waiting = { start: () => void; giveWay: () => void };

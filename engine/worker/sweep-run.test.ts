@@ -214,3 +214,14 @@ test('on threads a sweep answers what it answers in this one, and a live run goe
   expect(result.status.every((status) => status === CELL.done)).toBe(true);
   expect(onChunk.mock.calls.length).toBeLessThan(300);
 }, 30_000);
+
+test('a live run goes before chunks of several sweeps that wait already', async () => {
+  const program = await bundleSessionWorker();
+  client = createSessionClient(() => startNodeWorker(program), 1);
+  const order: string[] = [];
+  const sweeps = ['a', 'b', 'c'].map((name) => client!.sweep(plan, { onChunk: () => order.push(name) }));
+  await client.latest(timedStudy('b1'));
+  // Only the chunk under way was ahead of it.
+  expect(order).toEqual(['a']);
+  await Promise.all(sweeps.map(({ finished }) => finished));
+}, 30_000);

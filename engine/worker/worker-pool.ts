@@ -17,7 +17,7 @@ export class WorkerCrashed extends Error {
 
 type Remote = Comlink.Remote<SessionWorker>;
 type Work<T> = (worker: Remote) => Promise<Outcome<T>>;
-type Job<T = unknown> = { work: Work<T>; resolve: (value: T) => void; reject: (error: Error) => void };
+type Job<T = unknown> = { work: Work<T>; behind: boolean; resolve: (value: T) => void; reject: (error: Error) => void };
 type Seat = { worker: Worker; remote: Remote; job: Job | null };
 
 /** What a job's owner holds: the answer to come, and a way to call it off. */
@@ -44,12 +44,14 @@ export class WorkerPool {
     this.size = size;
   }
 
-  run<T>(work: Work<T>): Ticket<T> {
+  /** @param behind  lets jobs that are not go first, such as a run that a person waits for before one of thousands */
+  run<T>(work: Work<T>, behind = false): Ticket<T> {
     if (this.closed) return { result: Promise.reject(new Cancelled()), cancel: () => {} };
     let job: Job<T> | null = null;
     const result = new Promise<T>((resolve, reject) => {
-      job = { work, resolve, reject };
-      this.waiting.push(job as Job);
+      job = { work, behind, resolve, reject };
+      const at = behind ? -1 : this.waiting.findIndex((one) => one.behind);
+      this.waiting.splice(at < 0 ? this.waiting.length : at, 0, job as Job);
     });
     this.deal();
     return { result, cancel: () => this.cancel(job as Job | null) };

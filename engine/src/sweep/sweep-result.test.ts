@@ -5,6 +5,7 @@ import { limitBorders } from './limit-borders.ts';
 import { parseSweep } from './parse-sweep.ts';
 import { CELL, failedChunk, type SweepChunk } from './run-cells.ts';
 import { decodeSweep, encodeSweep, SweepDataError } from './sweep-bytes.ts';
+import { sliceValues } from './slice.ts';
 import { SweepResult } from './sweep-result.ts';
 import type { GridPlan } from './sweep-plan.ts';
 
@@ -121,4 +122,36 @@ test('limitBorders lie between neighbours of different dominant limit, and none 
     { x1: 0.5, y1: 0.5, x2: 1.5, y2: 0.5, lower: 'cold', upper: 'taper' },
     { x1: 0.5, y1: 0.5, x2: 0.5, y2: 1.5, lower: 'cold', upper: 'taper' },
   ]);
+});
+
+test('sliceValues has one row per value along y; axes may be turned, a third is held, one axis gives one row', () => {
+  const { base } = plan;
+  const gridOf = (...axes: object[]) =>
+    parseSweep({ format: 'voltiplano/study', version: 1, kind: 'sweep', base, sweep: { axes } }) as GridPlan;
+  const cube = gridOf(
+    { path: 'session.ambientC', values: [0, 1] },
+    { path: 'session.startTempC', values: [10, 11, 12] },
+    { path: 'station.powerMaxKw', values: [100, 200] },
+  );
+  const numbered = (grid: GridPlan) => {
+    const result = new SweepResult(grid);
+    const indices = Uint32Array.from({ length: grid.size }, (_, index) => index);
+    const values = new Float64Array(grid.columns.length * grid.size);
+    values.set(indices, 0);
+    result.merge({ indices, status: new Uint8Array(grid.size).fill(CELL.done), values, failures: [] });
+    return result;
+  };
+  const [first] = cube.columns;
+  const rows = (slice: { x: number; y: number; at: number[] }) =>
+    sliceValues(cube, numbered(cube), first, slice).map((row) => [...row]);
+  expect(rows({ x: 1, y: 0, at: [0, 0, 1] })).toEqual([
+    [1, 3, 5],
+    [7, 9, 11],
+  ]);
+  expect(rows({ x: 0, y: 2, at: [0, 2, 0] })).toEqual([
+    [4, 10],
+    [5, 11],
+  ]);
+  const line = gridOf({ path: 'session.ambientC', values: [0, 1, 2] });
+  expect(sliceValues(line, numbered(line), first, { x: 0, y: 0, at: [0] })).toEqual([Float64Array.of(0, 1, 2)]);
 });
