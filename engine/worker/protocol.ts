@@ -6,6 +6,9 @@ import type {
   SweepChunk,
   SweepPlan,
   ThermalAnalysis,
+  TuneProgress,
+  TuneRequestInput,
+  TuneResult,
 } from '../src/index.ts';
 
 /** What one session run answers: the result, the thermal network under its mean heat, and the time it took [ms]. */
@@ -36,4 +39,11 @@ export type SessionWorker = {
   ): Outcome<PackedAnswer>;
   summarise(studies: SessionStudyInput[], onProgress: ((done: number) => void) | null): Outcome<Outcome<RunSummary>[]>;
   sweepCells(plan: SweepPlan, indices: Uint32Array): Outcome<TimedChunk>;
+  /** Listens between runs for `cancelTune` with the same number. */
+  tune(
+    request: TuneRequestInput,
+    job: number,
+    onProgress: ((progress: TuneProgress) => void) | null,
+  ): Promise<Outcome<TuneResult>>;
+  cancelTune(job: number): void;
 };

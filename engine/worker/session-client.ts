@@ -1,8 +1,9 @@
 import * as Comlink from 'comlink';
-import type { SessionStudyInput, SweepPlan } from '../src/index.ts';
+import type { SessionStudyInput, SweepPlan, TuneProgress, TuneRequestInput, TuneResult } from '../src/index.ts';
 import { unpackAnswer } from './pack-series.ts';
 import type { Outcome, RunOptions, RunSummary, SessionAnswer } from './protocol.ts';
 import { createSweepRun, type ChunkRunner, type SweepRun, type SweepRunOptions } from './sweep-run.ts';
+import { tuneOn } from './tune-ticket.ts';
 import { asError, Cancelled, WorkerPool, type Ticket } from './worker-pool.ts';
 
 const CHUNK = 8;
@@ -19,6 +20,8 @@ export type SessionClient = {
   summarise(studies: SessionStudyInput[], onProgress?: (done: number) => void): Ticket<(RunSummary | Error)[]>;
   /** Runs the cells of a sweep on all workers; live runs go between its chunks. */
   sweep(plan: SweepPlan, options?: SweepRunOptions): SweepRun;
+  /** Tunes a taper on one worker; cancelling it keeps the worker. */
+  tune(request: TuneRequestInput, onProgress?: (progress: TuneProgress) => void): Ticket<TuneResult>;
   close(): void;
 };
 
@@ -34,6 +37,7 @@ export function createSessionClient(makeWorker: () => Worker, size?: number): Se
     latest: latestOf(run),
     summarise: (studies, onProgress) => summarise(pool, studies, onProgress),
     sweep: (plan, options) => createSweepRun(chunksOf(pool), plan, options),
+    tune: (request, onProgress) => tuneOn(pool, request, onProgress),
     close: () => pool.close(),
   };
 }

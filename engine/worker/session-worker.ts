@@ -9,6 +9,7 @@ import {
 } from '../src/index.ts';
 import { packAnswer } from './pack-series.ts';
 import { sweepCells } from './sweep-cells.ts';
+import { cancelTune, tuneJob } from './tune-job.ts';
 import type { Outcome, PackedAnswer, RunOptions, RunSummary, SessionAnswer, SessionWorker } from './protocol.ts';
 
 const worker: SessionWorker = {
@@ -27,6 +28,8 @@ const worker: SessionWorker = {
     return { ok: true, value: summaries };
   },
   sweepCells,
+  tune: tuneJob,
+  cancelTune,
 };
 
 Comlink.expose(worker);
