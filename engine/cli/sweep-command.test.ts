@@ -102,7 +102,7 @@ describe('sweep', () => {
     });
     const { out } = await sweep(moved);
     expect(out).toMatch(
-      /10–80 % \[min\], against [\d.]+ in the base\n {2}Taper, all values +0\.8: \+[\d.]+ +1\.1: −[\d.]+\n {2}Power, most/,
+      /10–80 % \[min\], against [\d.]+ in the base\n {2}Taper, all values +0\.8: \+[\d.]+ +1\.1: −[\d.]+\n {2}Station power, most/,
     );
     const spread = written('spread.json', 'ageing-fleet.json', {
       spread: { runs: 10, inputs: [{ path: 'session.ambientC', distribution: 'uniform', from: 5, to: 30 }] },

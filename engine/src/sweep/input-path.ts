@@ -10,6 +10,7 @@ export type StudyInput = {
   path: string;
   /** Part of the study it belongs to. */
   part: string;
+  /** Plain name, which says by itself what it belongs to: `Station power, most`. */
   label: string;
   /** Unit as in the study file; '' for a pure number or a fraction. */
   unit: string;
@@ -95,7 +96,7 @@ export function inputAt(study: SessionStudy, path: string): StudyInput | null {
   return {
     path,
     part: String(keys[0]),
-    label: `${row.label}${placeOf(keys)}`,
+    label: `${nameOf(row.label, keys)}${placeOf(keys)}`,
     unit: quantityPath === 'strategy.taper.value' ? taperUnit(study) : row.unit,
     value: value ?? null,
     quantity: row,
@@ -109,6 +110,15 @@ function factorAt({ strategy }: SessionStudy, path: FactorPath): StudyInput | nu
 }
 
 const taperUnit = ({ strategy: { taper } }: SessionStudy): string => (taper.shape === 'none' ? '' : taper.unit);
+
+/** Labels of the table of quantities that several parts share, or that say little away from their part. */
+const LEANING = /^(Mass|Capacity|Specific heat|Power|Current|Voltage|Ramp|From minute|Soc)\b/;
+
+function nameOf(label: string, keys: Keys): string {
+  if (!LEANING.test(label)) return label;
+  const thing = String(keys[1] === 'taper' ? keys[1] : keys[0]);
+  return `${thing.charAt(0).toUpperCase()}${thing.slice(1)} ${label.charAt(0).toLowerCase()}${label.slice(1)}`;
+}
 
 /** Which row of a table a path means, counted from 1, as it follows the label. */
 function placeOf(keys: Keys): string {

@@ -73,7 +73,7 @@ test('cellStudy sets parts, then values, then factors, leaves the base alone, an
   expect(study.station).toEqual({ ...other, currentMaxA: 333 });
   expect(study.cell.r0Milliohm).toBeCloseTo(base.cell.r0Milliohm * 1.5, 12);
   expect(study.cell.rcPairs?.[0]?.rMilliohm).toBeCloseTo(base.cell.rcPairs[0].rMilliohm * 1.5, 12);
-  expect(study.title).toContain('Current, most 333 A, Station Salar Cima, Cell resistance, all of it 1.5 ×');
+  expect(study.title).toContain('Station current, most 333 A; Station Salar Cima; Cell resistance, all of it 1.5 ×');
   expect(parseSessionStudy(study)).toEqual(study);
   expect(base).toEqual(before);
 });
@@ -110,7 +110,7 @@ test.each([
     [{ path: 'station.powerMaxKw', from: 0, to: 100, count: 3 }],
     'sweep.axes[0].from',
     'range',
-    '(Power, most) must be above 0 kW, but is 0',
+    '(Station power, most) must be above 0 kW, but is 0',
   ],
   [
     'no such input',
@@ -298,6 +298,9 @@ test('a spread has one sample in every slice of probability, the same for a seed
 test('studyInputs lists every number of a study once by plain name, rows one by one, each of which can be swept', () => {
   const inputs = studyInputs(base);
   const paths = inputs.map(({ path }) => path);
+  const labels = inputs.map(({ label }) => label);
+  expect(labels.filter((label, i) => labels.indexOf(label) < i)).toEqual([]);
+  expect(labels).toContain('Station power, most');
   expect(new Set(paths).size).toBe(paths.length);
   expect(inputs).toContainEqual(
     expect.objectContaining({ path: 'session.ambientC', label: 'Ambient', unit: '°C', part: 'session' }),

@@ -105,7 +105,7 @@ export function cellStudy(plan: SweepPlan, index: number): SessionStudyInput {
 const MOST_TITLE = 300;
 
 function titleOf({ title, base }: SweepPlan, changes: readonly Change[]): string {
-  const whole = [base.title ?? title, ...changes.map(changeText)].filter((text) => text !== '').join(', ');
+  const whole = [base.title ?? title, ...changes.map(changeText)].filter((text) => text !== '').join('; ');
   return whole.length > MOST_TITLE ? `${whole.slice(0, MOST_TITLE - 1)}…` : whole;
 }
 
