@@ -29,7 +29,7 @@ export type TuneOptions = {
 };
 
 /**
- * Finds the fastest taper of a shape that keeps every bound at every moment, in every condition (engine/MODEL.md, section 16).
+ * Finds the fastest taper of a shape that keeps every bound at every moment, in every condition (engine/MODEL.md, "Tuning a taper").
  * Deterministic: the same request gives the same bytes.
  *
  * @param request  a checked request
