@@ -1,9 +1,20 @@
 import type { Page } from '@playwright/test';
 import { expect, field, test } from './quiet-page.ts';
-import { call, caller, exampleStudy, join, makeStudy, openStudy, signUp, titleCell, type Team } from './team.ts';
+import {
+  call,
+  caller,
+  exampleStudy,
+  join,
+  makeStudy,
+  openStudy,
+  PASSWORD,
+  signUp,
+  titleCell,
+  type Team,
+} from './team.ts';
 
-// The browser names failed calls; these journeys cut the connection and meet conflicts on purpose.
-test.use({ expectedErrors: /ERR_INTERNET_DISCONNECTED|status of 412/ });
+// The browser names failed calls; these journeys cut the connection, end sessions and meet conflicts on purpose.
+test.use({ expectedErrors: /ERR_INTERNET_DISCONNECTED|status of (401|412)/ });
 
 const kept = (page: Page) => titleCell(page, 'Kept');
 const current = (page: Page) => field(page, 'Current, most');
@@ -72,6 +83,31 @@ test('edits of a tab that was closed without a connection are found and sent by 
   await expect(next.getByText('Found in this browser')).toBeVisible();
   await expect(current(next)).toHaveValue('365');
   await expect.poll(() => savedCurrent(next, team, id)).toBe(365);
+});
+
+test('a session ended from another device asks for the password over the desk, and what was typed is saved', async ({
+  page,
+  browser,
+}) => {
+  const { team, id } = await opened(page);
+  const other = await (await browser.newContext()).newPage();
+  await call(caller(other), 'post', '/auth/sign-in', { body: { email: team.email, password: PASSWORD } });
+  await other.goto('/account');
+  await other.getByRole('button', { name: 'Sign out everywhere' }).click();
+  await other.getByRole('alertdialog').getByRole('button', { name: 'Sign out everywhere' }).click();
+  await expect(other).toHaveURL(/\/sign-in/);
+  await other.context().close();
+
+  await current(page).fill('370');
+  const dialog = page.getByRole('dialog', { name: 'Signed out on this device' });
+  await expect(dialog).toContainText('What you typed on this page is still here');
+  await expect(kept(page)).toContainText('Not kept: signed out. Your changes are held in this browser.');
+  await dialog.getByRole('textbox', { name: 'Password' }).fill(PASSWORD);
+  await dialog.getByRole('button', { name: 'Sign in', exact: true }).click();
+  await expect(dialog).toHaveCount(0);
+  await expect(kept(page)).toContainText('just now');
+  await expect(current(page)).toHaveValue('370');
+  expect(await savedCurrent(page, team, id)).toBe(370);
 });
 
 test.describe('two people change one study', () => {
@@ -153,6 +189,8 @@ test('a revision is saved with a message, looked at in the history, compared and
   const history = page.getByRole('region', { name: 'History' });
   const second = history.getByRole('listitem').filter({ hasText: 'Station current down to 350 A' });
   await expect(second).toContainText(/10–80 % [\d.]+ min [\d.]+ slower/);
+  const activity = history.getByRole('region', { name: 'Activity' }).getByRole('listitem');
+  await expect(activity).toHaveText([/^Inés Quispe revised this study, revision 2/, /^Inés Quispe created this study/]);
   await second.getByRole('button', { name: 'What changed' }).click();
   await expect(second.getByRole('row').filter({ hasText: 'Current, most' })).toHaveText(/500 A\s*350 A/);
   await expect(page).toHaveURL(/revision=2/);

@@ -28,13 +28,16 @@ export async function call<T>(
 
 export type Team = { workspaceId: string; email: string };
 
+/** Everybody's password. */
+export const PASSWORD = 'a long enough one';
+
 let people = 0;
 
 /** Signs somebody up with a workspace of their own; the page's browser is then signed in. */
 export async function signUp(page: Page, name: string): Promise<Team> {
   const email = `person${++people}.${Date.now()}@puna.example`;
   const me = await call<{ workspaces: { workspaceId: string }[] }>(caller(page), 'post', '/auth/sign-up', {
-    body: { email, name, password: 'a long enough one', workspaceName: 'Puna Mobility' },
+    body: { email, name, password: PASSWORD, workspaceName: 'Puna Mobility' },
   });
   return { workspaceId: me.workspaces[0]!.workspaceId, email };
 }

@@ -36,6 +36,14 @@ test('a field is listed with its unit on both sides, what is missing as none', (
   ]);
 });
 
+test('a cell without a value says what stands in its place, without a unit', () => {
+  const legs = (km: number) => ({ trip: { legs: [{ km, kmPerH: 80 }] } });
+  const [[, , after] = []] = rows({}, legs(60));
+  expect(after).toBe(
+    '60 km, Speed: 80 km/h, Climb: 0 m, Head wind: 0.0 km/h, Ambient: of the trip, Station: none, Depart: rule of the trip',
+  );
+});
+
 test('of a table only the row that differs is listed', () => {
   expect(rows(steps(310), steps(320))).toEqual([['Taper ledges, row 2Strategy', '30 %, 310 A', '30 %, 320 A']]);
 });

@@ -65,8 +65,8 @@ function cellText(
 ): string[] {
   const isWide = columns.length > 3;
   if (text === null || (isWide && !differs && !isFirst)) return [];
-  const { label, unit } = columns[j]!;
-  const value = withUnit(text, unit) ?? '';
+  const { label, unit, empty } = columns[j]!;
+  const value = text === empty ? text : withUnit(text, unit)!;
   return [isWide && !isFirst ? `${label}: ${value}` : value];
 }
 

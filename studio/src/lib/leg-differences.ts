@@ -35,13 +35,12 @@ function rowOf({ km, kmPerH, climbM = 0, windKmPerH = 0, ambientC, station, depa
 
 function columnsOf(temperature: TemperatureUnit): DiffColumn[] {
   const number = (label: string, path: QuantityPath) => columnOf(label, measureOf(path), temperature);
-  const ambient = number('Ambient', 'trip.legs[].ambientC');
   return [
     number('Distance', 'trip.legs[].km'),
     number('Speed', 'trip.legs[].kmPerH'),
     number('Climb', 'trip.legs[].climbM'),
     number('Head wind', 'trip.legs[].windKmPerH'),
-    { ...ambient, text: (cell) => ambient.text(cell) ?? 'of the trip' },
+    { ...number('Ambient', 'trip.legs[].ambientC'), empty: 'of the trip' },
     { label: 'Station', unit: '', text: (cell) => (cell as string | null) ?? 'none' },
     {
       label: 'Depart',

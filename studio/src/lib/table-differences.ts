@@ -9,6 +9,9 @@ export type CellDifference = { before: string | null; after: string | null; diff
 /** One row before and after; `before` or `after` is its place counted from 1, null where the row is not there. */
 export type RowDifference = { before: number | null; after: number | null; cells: CellDifference[] };
 
+/** `empty` is what a cell without a value says; it takes no unit. */
+type ColumnHead = { label: string; unit: string; empty?: string };
+
 export type TableDifference = {
   kind: 'table';
   /** Path of the table in the file. */
@@ -16,12 +19,12 @@ export type TableDifference = {
   /** The part it lies in: "Strategy". */
   section: string;
   label: string;
-  columns: { label: string; unit: string }[];
+  columns: ColumnHead[];
   /** Only rows that differ. */
   rows: RowDifference[];
 };
 
-export type DiffColumn = { label: string; unit: string; text: (cell: unknown) => string | null };
+export type DiffColumn = ColumnHead & { text: (cell: unknown) => string | null };
 
 type Sides = { before: readonly unknown[][]; after: readonly unknown[][] };
 
@@ -34,9 +37,9 @@ export function gridDifference(
   const rows = alignedRows(before, after).map((pair): RowDifference => {
     const old = pair.before === null ? null : before[pair.before]!;
     const next = pair.after === null ? null : after[pair.after]!;
-    const cells = columns.map(({ text }, j): CellDifference => {
-      const was = old && text(old[j]);
-      const is = next && text(next[j]);
+    const cells = columns.map(({ text, empty = null }, j): CellDifference => {
+      const was = old && (text(old[j]) ?? empty);
+      const is = next && (text(next[j]) ?? empty);
       return { before: was, after: is, differs: JSON.stringify(old?.[j]) !== JSON.stringify(next?.[j]) };
     });
     const place = (at: number | null) => (at === null ? null : at + 1);
@@ -45,7 +48,7 @@ export function gridDifference(
   const differing = rows.filter(
     ({ before: was, after: is, cells }) => was === null || is === null || cells.some(({ differs }) => differs),
   );
-  const heads = columns.map(({ label, unit }) => ({ label, unit }));
+  const heads = columns.map(({ text: _text, ...column }) => column);
   return differing.length === 0 ? null : { kind: 'table', ...head, columns: heads, rows: differing };
 }
 
@@ -58,7 +61,7 @@ export function tableDifference(
 ): TableDifference | null {
   const columns = spec.columns.map(({ label, measure, lastOpen }) => ({
     ...columnOf(label, measure, temperature),
-    ...(lastOpen ? { text: (cell: unknown) => numberCell(cell, measure, temperature) ?? 'to the end' } : {}),
+    ...(lastOpen ? { empty: 'to the end' } : {}),
   }));
   const head = { path: spec.path, section, label: spec.title };
   return gridDifference(head, columns, { before: spec.toGrid(before), after: spec.toGrid(after) });

@@ -1,14 +1,14 @@
-import { Link } from 'react-router-dom';
 import type { Activity } from '../../../../server/src/contract/workspace.ts';
+import { ActivityWords } from '../../components/activity-words.tsx';
 import { AsyncView } from '../../components/async-view.tsx';
 import { Button } from '../../components/button.tsx';
 import { Notice } from '../../components/notice.tsx';
 import { PageTitle } from '../../components/page-title.tsx';
 import { problemSentence } from '../../lib/api/api-problem.ts';
+import { activitySentence } from '../../lib/activity-sentence.ts';
 import { formatClockTime } from '../../lib/moments.ts';
 import { useWorkspace } from '../../lib/session/use-workspace.ts';
 import { useActivity } from './api/list-activity.ts';
-import { activitySentence } from './model/activity-sentence.ts';
 import { byDay } from './model/by-day.ts';
 
 /** Who did what in the workspace, newest first, by days. */
@@ -56,15 +56,7 @@ function Deed({ deed }: { deed: Activity }) {
         {formatClockTime(deed.at)}
       </time>
       <p>
-        {pieces.map((piece, i) =>
-          typeof piece === 'string' ? (
-            piece
-          ) : (
-            <Link key={i} to={piece.to}>
-              {piece.text}
-            </Link>
-          ),
-        )}
+        <ActivityWords pieces={pieces} />
         {message && <span className="said">{message}</span>}
       </p>
     </li>

@@ -15,11 +15,14 @@ export const queryClient: QueryClient = new QueryClient({
     },
   }),
   defaultOptions: {
+    // Without a connection a call fails and says so, instead of waiting without a word; reads follow when it is back.
     queries: {
+      networkMode: 'always',
+      refetchOnReconnect: true,
       staleTime: 10_000,
       retry: (failures, error) => !(error instanceof ApiProblem && error.status < 500) && failures < TRIES,
     },
-    mutations: { retry: false },
+    mutations: { networkMode: 'always', retry: false },
   },
 });
 

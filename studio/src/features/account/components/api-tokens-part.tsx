@@ -22,7 +22,7 @@ export function ApiTokensPart({ me }: { me: Me }) {
     <section className="page-part" aria-labelledby="part-tokens">
       <h2 id="part-tokens">API tokens</h2>
       <p className="my-[8px] text-ink2">
-        For scripts, which send one as <code className="num">Authorization: Bearer …</code>.{' '}
+        For scripts, which send one as <code className="num">Authorization: Bearer TOKEN</code>.{' '}
         <a href="/api/docs">What the API offers</a>
       </p>
       {me.workspaces.length > 1 && (

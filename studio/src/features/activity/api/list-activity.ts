@@ -12,6 +12,8 @@ export function useActivity(workspaceId: string) {
         query: pageParam === null ? {} : { cursor: pageParam },
         signal,
       }),
+    // Every deed in the workspace adds to it.
+    staleTime: 0,
     initialPageParam: null as string | null,
     getNextPageParam: ({ nextCursor }) => nextCursor,
   });

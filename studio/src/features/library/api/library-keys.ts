@@ -1,7 +1,5 @@
 import type { QueryClient } from '@tanstack/react-query';
-
-/** Everything of a workspace's library. */
-export const libraryKey = (workspaceId: string) => ['workspace', workspaceId, 'library'] as const;
+import { libraryKey } from '../../../lib/api/library-key.ts';
 
 /** One item, whatever is known of it. */
 export const itemKey = (workspaceId: string, itemId: string) => [...libraryKey(workspaceId), 'item', itemId] as const;

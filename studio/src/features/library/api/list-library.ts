@@ -2,7 +2,7 @@ import { keepPreviousData, useInfiniteQuery } from '@tanstack/react-query';
 import type { QueryOf } from '../../../../../server/src/contract/endpoint.ts';
 import { libraryEndpoints } from '../../../../../server/src/contract/library.ts';
 import { callApi } from '../../../lib/api/call-api.ts';
-import { libraryKey } from './library-keys.ts';
+import { libraryKey } from '../../../lib/api/library-key.ts';
 
 export type LibraryQuery = Partial<Omit<QueryOf<typeof libraryEndpoints.listLibrary>, 'cursor' | 'limit'>>;
 
@@ -21,5 +21,7 @@ export function useLibraryList(workspaceId: string, query: LibraryQuery) {
     initialPageParam: null as string | null,
     getNextPageParam: (last) => last.nextCursor,
     placeholderData: keepPreviousData,
+    // Studies that take or let go of a part change how many use it.
+    staleTime: 0,
   });
 }

@@ -2,7 +2,7 @@ import { queryOptions, useQuery } from '@tanstack/react-query';
 import type { LibraryItem, LibraryKind } from '../../../../../server/src/contract/library.ts';
 import { libraryEndpoints } from '../../../../../server/src/contract/library.ts';
 import { callApi } from '../../../lib/api/call-api.ts';
-import { libraryKey } from './library-keys.ts';
+import { libraryKey } from '../../../lib/api/library-key.ts';
 
 const PAGE = 200;
 

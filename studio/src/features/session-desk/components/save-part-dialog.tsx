@@ -8,6 +8,7 @@ import { Form } from '../../../components/form/form.tsx';
 import { FormField } from '../../../components/form/form-field.tsx';
 import { toast } from '../../../components/toasts.tsx';
 import { WordSwitch } from '../../../components/word-switch.tsx';
+import { libraryKey } from '../../../lib/api/library-key.ts';
 import { createLibraryItem, newItemSchema, newRevisionSchema, reviseLibraryItem } from '../api/save-library-item.ts';
 import { useStudyDesk } from '../hooks/study-desk-context.ts';
 import { useDeskStore } from '../hooks/use-desk.ts';
@@ -113,7 +114,7 @@ function useSaved(part: DeskPart, onDone: () => void) {
     const label = `save ${name}, revision ${revision}, to the library`;
     store.dispatch({ type: 'refer', references: next, parts: [{ path: part, value: body }], label });
     toast(`In the library: ${name}, revision ${revision}`);
-    void client.invalidateQueries({ queryKey: ['library', place.workspaceId] });
+    void client.invalidateQueries({ queryKey: libraryKey(place.workspaceId) });
     onDone();
   };
 }

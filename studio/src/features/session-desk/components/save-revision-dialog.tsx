@@ -14,6 +14,7 @@ import { studyDifferences } from '../../../lib/study-differences.ts';
 import { useUnits } from '../../../lib/units.ts';
 import { revisionQuery, revisionsQuery } from '../api/revision-queries.ts';
 import { revisionMessage, saveRevision } from '../api/save-revision.ts';
+import { studyActivityQuery } from '../api/study-activity-query.ts';
 import { setStudy, studyQuery } from '../api/study-query.ts';
 import { useStudyDesk } from '../hooks/study-desk-context.ts';
 import { useStudy } from '../hooks/use-study.ts';
@@ -116,6 +117,7 @@ function useSaveRevision() {
       );
       await setStudy(client, place, study);
       await client.invalidateQueries({ queryKey: revisionsQuery(place).queryKey });
+      void client.invalidateQueries({ queryKey: studyActivityQuery(place).queryKey });
       return study;
     } catch (error) {
       if (!isProblem(error, 'EDIT_CONFLICT')) throw error;

@@ -11,6 +11,7 @@ import { useStudyDeeds } from '../hooks/use-study-deeds.ts';
 import type { DeskStore } from '../model/desk-store.ts';
 import { referenceOnly } from '../model/working-content.ts';
 import { RevisionList } from './revision-list.tsx';
+import { StudyActivity } from './study-activity.tsx';
 
 type Props = { store: DeskStore };
 
@@ -33,6 +34,7 @@ export function SessionHistory({ store }: Props) {
         now={() => store.get().sheet.draft.study}
         actions={(one) => <Actions store={store} revision={one} />}
       />
+      <StudyActivity place={place} />
     </section>
   );
 }

@@ -20,6 +20,7 @@ import { revisionNumbers } from '../model/revision-numbers.ts';
 import { stateWords } from '../../../lib/study-names.ts';
 import { studyKindLine } from '../model/study-line.ts';
 import { RevisionList } from './revision-list.tsx';
+import { StudyActivity } from './study-activity.tsx';
 
 /** What the whole time of a trip is called. */
 const TRIP_END = 'door to door';
@@ -73,6 +74,7 @@ export function TripStudy({ place, study }: Props) {
                 )
               }
             />
+            <StudyActivity place={place} />
           </section>
         ) : (
           <Inputs study={study} />

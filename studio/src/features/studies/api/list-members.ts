@@ -1,11 +1,12 @@
 import { useQuery } from '@tanstack/react-query';
 import { workspaceEndpoints } from '../../../../../server/src/contract/workspace.ts';
 import { callApi } from '../../../lib/api/call-api.ts';
+import { membersKey } from '../../../lib/api/members-key.ts';
 
 /** Who may own a study. */
 export function useMembers(workspaceId: string) {
   return useQuery({
-    queryKey: ['members', workspaceId],
+    queryKey: membersKey(workspaceId),
     queryFn: ({ signal }) => callApi(workspaceEndpoints.listMembers, { params: { workspaceId }, signal }),
     staleTime: 60_000,
   });

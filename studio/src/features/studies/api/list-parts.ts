@@ -1,13 +1,14 @@
 import { useQuery } from '@tanstack/react-query';
 import { libraryEndpoints, type LibraryItem } from '../../../../../server/src/contract/library.ts';
 import { callApi } from '../../../lib/api/call-api.ts';
+import { libraryKey } from '../../../lib/api/library-key.ts';
 
 const LONGEST_PAGE = 200;
 
 /** Every part of the library outside the archive, by name. */
 export function useParts(workspaceId: string) {
   return useQuery({
-    queryKey: ['library', workspaceId, 'all-parts'],
+    queryKey: [...libraryKey(workspaceId), 'all-parts'],
     queryFn: ({ signal }) => allParts(workspaceId, signal),
   });
 }

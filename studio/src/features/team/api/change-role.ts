@@ -3,7 +3,7 @@ import type { Role } from '../../../../../server/src/contract/roles.ts';
 import { type Member, workspaceEndpoints } from '../../../../../server/src/contract/workspace.ts';
 import { callApi } from '../../../lib/api/call-api.ts';
 import { meQuery } from '../../../lib/session/me-query.ts';
-import { membersKey } from './list-members.ts';
+import { membersKey } from '../../../lib/api/members-key.ts';
 
 type Members = { items: Member[] };
 

@@ -1,8 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { workspaceEndpoints } from '../../../../../server/src/contract/workspace.ts';
 import { callApi } from '../../../lib/api/call-api.ts';
-
-export const membersKey = (workspaceId: string) => ['w', workspaceId, 'members'];
+import { membersKey } from '../../../lib/api/members-key.ts';
 
 /** Members by name. */
 export function useMembers(workspaceId: string) {

@@ -1,7 +1,7 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { workspaceEndpoints } from '../../../../../server/src/contract/workspace.ts';
 import { callApi } from '../../../lib/api/call-api.ts';
-import { membersKey } from './list-members.ts';
+import { membersKey } from '../../../lib/api/members-key.ts';
 
 export function useRemoveMember(workspaceId: string) {
   const client = useQueryClient();

@@ -1,4 +1,4 @@
-import type { Activity } from '../../../../../server/src/contract/workspace.ts';
+import type { Activity } from '../../../server/src/contract/workspace.ts';
 
 /** A piece of a sentence: words, or words that lead to a page. */
 export type Piece = string | { to: string; text: string };
@@ -9,7 +9,8 @@ export type Sentence = {
   message: string | null;
 };
 
-type Telling = (detail: Record<string, string>, subject: (text: string) => Piece) => Piece[];
+/** `subject` is null where the sentence stands on the page of its own subject. */
+type Telling = (detail: Record<string, string>, subject: ((text: string) => Piece) | null) => Piece[];
 
 const revisionOf = (detail: Record<string, string>) => (detail.revision ? `, revision ${detail.revision}` : '');
 const part = ({ kind, name }: Record<string, string>) => [kind, name].filter(Boolean).join(' ');
@@ -17,10 +18,16 @@ const study = ({ number, title }: Record<string, string>) => [number, title].fil
 
 const aboutPart =
   (verb: string, rest = ''): Telling =>
-  (detail, subject) => [`${verb} the `, subject(part(detail)), revisionOf(detail), rest];
+  (detail, subject) =>
+    subject
+      ? [`${verb} the `, subject(part(detail)), revisionOf(detail), rest]
+      : [`${verb} this part`, revisionOf(detail), rest];
 const aboutStudy =
   (verb: string, rest = ''): Telling =>
-  (detail, subject) => [`${verb} study `, subject(study(detail)), revisionOf(detail), rest];
+  (detail, subject) =>
+    subject
+      ? [`${verb} study `, subject(study(detail)), revisionOf(detail), rest]
+      : [`${verb} this study`, revisionOf(detail), rest];
 
 /** What each action of the log reads as, after the name of who did it. */
 const tellings: Record<string, Telling> = {
@@ -52,15 +59,16 @@ const tellings: Record<string, Telling> = {
  * One deed as a sentence, whose subject leads to its page where there is one.
  *
  * @param deed  as the log holds it: names and values are those of then
+ * @param here  id of the study or part whose page the sentence stands on, which it then need not name
  */
-export function activitySentence(workspaceId: string, deed: Activity): Sentence {
+export function activitySentence(workspaceId: string, deed: Activity, here?: string): Sentence {
   const who = deed.personName ?? 'Somebody whose account is gone';
   const telling = tellings[deed.action];
   const subject = (text: string): Piece => {
     const to = pageOf(workspaceId, deed);
     return to ? { to, text } : text;
   };
-  const told = telling ? telling(deed.detail, subject) : [`did ${deed.action}`];
+  const told = telling ? telling(deed.detail, deed.subjectId === here ? null : subject) : [`did ${deed.action}`];
   return { pieces: [`${who} `, ...told].filter((piece) => piece !== ''), message: saidBeside(deed) };
 }
 

@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import type { Activity } from '../../../../../server/src/contract/workspace.ts';
+import type { Activity } from '../../../server/src/contract/workspace.ts';
 import { activitySentence, type Piece } from './activity-sentence.ts';
 
 const W = 'w0000000000000000000000000';
@@ -34,6 +34,14 @@ describe('activitySentence', () => {
     expect(revised.message).toBe('Ledge down to 200 A');
     const added = told(deed('library.added', { kind: 'pack', name: 'Vicuña 86', revision: '1' }));
     expect(added.pieces).toContainEqual({ to: `/w/${W}/library/s1`, text: 'pack Vicuña 86' });
+  });
+
+  test('does not name the study whose page it stands on, and leads nowhere', () => {
+    const revised = deed('study.revised', { number: '26', title: 'Ledge at 36 %', revision: '6' });
+    expect(activitySentence(W, revised, 's1').pieces).toEqual(['Rosa Mamani ', 'revised this study', ', revision 6']);
+    expect(activitySentence(W, revised, 's2').pieces).toEqual(told(revised).pieces);
+    const archived = deed('study.archived', { number: '26', title: 'Ledge at 36 %' });
+    expect(text(activitySentence(W, archived, 's1').pieces)).toBe('Rosa Mamani put this study into the archive');
   });
 
   test('says so where the account is gone, and names an action it does not know', () => {
