@@ -22,5 +22,11 @@ export function ErrorPage() {
 
 function sentenceOf(error: unknown): string {
   if (isRouteErrorResponse(error)) return `${error.status} ${error.statusText}`;
+  if (isMissingBundle(error)) return 'The server was not reached, or it has a newer version of this page since.';
   return error instanceof Error ? error.message : String(error);
+}
+
+/** Each engine has its own words for a bundle that did not come. */
+function isMissingBundle(error: unknown): boolean {
+  return error instanceof TypeError && /dynamically imported module|importing a module script/i.test(error.message);
 }
