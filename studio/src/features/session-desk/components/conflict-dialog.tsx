@@ -71,7 +71,7 @@ function Choice({ store, theirs, name, onDone }: ChoiceProps) {
     onDone();
   };
   return (
-    <div className="conflict">
+    <div className="study-conflict">
       <div className="long-list">
         {differences.length > 0 ? (
           <DifferenceList differences={differences} before="Yours" after={name} caption="Inputs that differ" />
@@ -80,7 +80,7 @@ function Choice({ store, theirs, name, onDone }: ChoiceProps) {
         )}
       </div>
       {problem && <Notice kind="stop">{problem}</Notice>}
-      <dl className="choices">
+      <dl className="conflict-choices">
         <Way act={<Button onClick={choose(keepMine)}>Keep mine</Button>}>
           Yours is written over it. What it was stays one step of undo away.
         </Way>
