@@ -26,7 +26,8 @@ function sentenceOf(error: unknown): string {
   return error instanceof Error ? error.message : String(error);
 }
 
-/** Each engine has its own words for a bundle that did not come. */
+/** Each browser, and the loader of the bundles, has its own words for one that did not come. */
 function isMissingBundle(error: unknown): boolean {
-  return error instanceof TypeError && /dynamically imported module|importing a module script/i.test(error.message);
+  const words = /dynamically imported module|importing a module script|unable to preload/i;
+  return error instanceof Error && words.test(error.message);
 }

@@ -7,8 +7,10 @@ import { useMe } from '../lib/session/use-me.ts';
 export function SignedIn() {
   const query = useMe();
   const location = useLocation();
+  // Who is known to be signed in stays so without a connection: each page says itself what is not up to date.
+  const shown = query.data === undefined ? query : { ...query, error: null };
   return (
-    <AsyncView query={query} loading="Signing in">
+    <AsyncView query={shown} loading="Signing in">
       {(me) => (me ? <Outlet /> : <Navigate to={signInPath(location)} replace />)}
     </AsyncView>
   );

@@ -36,6 +36,11 @@ describe('activitySentence', () => {
     expect(added.pieces).toContainEqual({ to: `/w/${W}/library/s1`, text: 'pack Vicuña 86' });
   });
 
+  test('calls cooling what the library calls cooling', () => {
+    const revised = deed('library.revised', { kind: 'thermal', name: 'Vicuña loop, chiller 4.2 kW', revision: '3' });
+    expect(text(told(revised).pieces)).toBe('Rosa Mamani revised the cooling Vicuña loop, chiller 4.2 kW, revision 3');
+  });
+
   test('does not name the study whose page it stands on, and leads nowhere', () => {
     const revised = deed('study.revised', { number: '26', title: 'Ledge at 36 %', revision: '6' });
     expect(activitySentence(W, revised, 's1').pieces).toEqual(['Rosa Mamani ', 'revised this study', ', revision 6']);

@@ -13,7 +13,9 @@ export type Sentence = {
 type Telling = (detail: Record<string, string>, subject: ((text: string) => Piece) | null) => Piece[];
 
 const revisionOf = (detail: Record<string, string>) => (detail.revision ? `, revision ${detail.revision}` : '');
-const part = ({ kind, name }: Record<string, string>) => [kind, name].filter(Boolean).join(' ');
+/** The library's kinds go by their own names, but for the one that people call otherwise. */
+const part = ({ kind, name }: Record<string, string>) =>
+  [kind === 'thermal' ? 'cooling' : kind, name].filter(Boolean).join(' ');
 const study = ({ number, title }: Record<string, string>) => [number, title].filter(Boolean).join(' ');
 
 const aboutPart =
