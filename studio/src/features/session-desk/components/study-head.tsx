@@ -71,9 +71,11 @@ function ChangedWords() {
   const sinceRevision = useDesk(({ sheet }) =>
     !hasBaseline && inputs?.kind === 'session' ? changedPaths(sheet.draft.study, inputs).length : null,
   );
+  const isRetitled = useDesk(({ sheet }) => (sheet.draft.study.title ?? '') !== (inputs?.title ?? ''));
   if (hasBaseline) return inputsWords(ofBaseline);
   if (sinceRevision === null) return '';
-  return sinceRevision === 0 ? 'nothing' : `${inputsWords(sinceRevision)} since ${revision}`;
+  if (sinceRevision > 0) return `${inputsWords(sinceRevision)} since ${revision}`;
+  return isRetitled ? `title since ${revision}` : 'nothing';
 }
 
 function inputsWords(count: number): string {
