@@ -7,10 +7,17 @@ import { exampleStudy, exampleTrip } from '../testing/example-study.ts';
 import { computeHeadline } from './compute-headline.ts';
 
 const EXAMPLES = path.join(import.meta.dirname, '../../../examples');
-const examples = readdirSync(EXAMPLES).filter((name) => name.endsWith('.json'));
-const read = (name: string) => JSON.parse(readFileSync(path.join(EXAMPLES, name), 'utf8')) as unknown;
+const read = (name: string) => JSON.parse(readFileSync(path.join(EXAMPLES, name), 'utf8')) as { kind: string };
+/** Study files; requests to tune a taper lie beside them. */
+const examples = readdirSync(EXAMPLES).filter(
+  (name) => name.endsWith('.json') && ['session', 'trip'].includes(read(name).kind),
+);
 
 describe('computeHeadline', () => {
+  it('has examples of both kinds to run', () => {
+    expect(new Set(examples.map((name) => read(name).kind))).toEqual(new Set(['session', 'trip']));
+  });
+
   it.each(examples)('of %s is of its schema, and the same each time', (name) => {
     const headline = computeHeadline(read(name), '0.1.0');
     expect(headlineSchema.parse(headline)).toEqual(headline);
