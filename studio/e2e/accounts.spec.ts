@@ -1,6 +1,7 @@
 import AxeBuilder from '@axe-core/playwright';
-import type { APIRequestContext, BrowserContext, Page } from '@playwright/test';
+import type { BrowserContext, Page } from '@playwright/test';
 import { expect, test } from '@playwright/test';
+import { mailedToken } from './team.ts';
 
 test.describe.configure({ timeout: 120_000 });
 
@@ -11,20 +12,6 @@ let count = 0;
 function newEmail(name: string): string {
   count += 1;
   return `${name}.${Date.now()}.${count}@puna.example`;
-}
-
-/** The part behind the # of the newest link mailed to somebody. */
-async function mailedToken(request: APIRequestContext, to: string, page: string): Promise<string> {
-  const found = async () => {
-    const answer = await request.get('/api/v1/dev/mailbox', {
-      params: { to },
-      headers: { accept: 'application/json' },
-    });
-    const { items } = (await answer.json()) as { items: { text: string }[] };
-    return items.map(({ text }) => new RegExp(`/${page}#(\\S+)`).exec(text)?.[1]).find((token) => token !== undefined);
-  };
-  await expect.poll(found, { message: `a mail with a link to ${page} for ${to}` }).toBeTruthy();
-  return (await found())!;
 }
 
 async function signUp(page: Page, { name, email, workspace }: { name: string; email: string; workspace: string }) {

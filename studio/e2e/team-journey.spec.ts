@@ -22,7 +22,7 @@ async function invite(owner: Page, workspaceId: string, role: string): Promise<s
 }
 
 async function joinByMail(owner: Page, guest: Page, email: string, name: string): Promise<void> {
-  await guest.goto(`/join#${await mailedToken(owner, email)}`);
+  await guest.goto(`/join#${await mailedToken(owner.request, email, 'join')}`);
   await guest.getByLabel('Your name').fill(name);
   await guest.getByLabel('Password', { exact: true }).fill('five plain words here');
   await guest.getByRole('button', { name: 'Make the account and join' }).click();

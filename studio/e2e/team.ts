@@ -46,21 +46,24 @@ export async function signUp(page: Page, name: string): Promise<Team> {
 export async function join(owner: Page, guest: Page, team: Team, name: string, role: string): Promise<void> {
   const { email } = await signUp(guest, name);
   await call(caller(owner), 'post', `/workspaces/${team.workspaceId}/invitations`, { body: { email, role } });
-  const token = await mailedToken(owner, email);
+  const token = await mailedToken(owner.request, email, 'join');
   await call(caller(guest), 'post', '/invitations/accept', { body: { token } });
 }
 
-/** The secret of the newest invitation mailed to somebody. */
-export async function mailedToken(page: Page, email: string): Promise<string> {
+/** The secret behind the # of the newest link to a page that was mailed to somebody. */
+export async function mailedToken(request: APIRequestContext, to: string, page: string): Promise<string> {
+  const link = new RegExp(`/${page}#(\\S+)`);
   let token: string | undefined;
-  await expect
-    .poll(async () => {
-      const address = `/dev/mailbox?to=${encodeURIComponent(email)}`;
-      const { items } = await call<{ items: { text: string }[] }>(caller(page), 'get', address);
-      token = items.map(({ text }) => /\/join#(\S+)/.exec(text)?.[1]).find(Boolean);
-      return token;
-    })
-    .toBeTruthy();
+  const look = async () => {
+    const answer = await request.get('/api/v1/dev/mailbox', {
+      params: { to },
+      headers: { accept: 'application/json' },
+    });
+    const { items } = (await answer.json()) as { items: { text: string }[] };
+    token = items.map(({ text }) => link.exec(text)?.[1]).find((found) => found !== undefined);
+    return token;
+  };
+  await expect.poll(look, { message: `a mail with a link to ${page} for ${to}` }).toBeTruthy();
   return token!;
 }
 

@@ -1,6 +1,5 @@
 import { parseSessionStudy, simulateSession } from '@voltiplano/engine';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
-import { workspaceEndpoints } from '../contract/workspace.ts';
 import { engineVersion } from '../runs/headline-runs.ts';
 import { exampleStudy, exampleTrip } from '../testing/example-study.ts';
 import { StudyCalls } from '../testing/study-calls.ts';
@@ -25,19 +24,7 @@ const warm = exampleStudy('vicuna-warm-arrival');
 const titled = (title: string) => ({ ...warm, title });
 const hotter = { ...titled('Hotter'), session: { ...warm.session, startTempC: 40 } };
 
-/** A new study of the analyst. The studies of a fresh world go on at number 2: number 1 is the world's own. */
-async function begin(inputs: object = warm): Promise<string> {
-  const { status, body } = await analyst.create({ inputs });
-  expect(status).toBe(201);
-  return body.id as string;
-}
-
-async function deeds(): Promise<unknown[]> {
-  const call = { params: { workspaceId: world.workspaceId } };
-  const { body } = await analyst.browser.call(workspaceEndpoints.listActivity, call);
-  return body.items as unknown[];
-}
-
+// Studies of a fresh world go on at number 2: number 1 is the world's own.
 describe('createStudy', () => {
   it('makes a draft of the caller’s own with a first revision, and keeps the inputs as they were sent', async () => {
     const { body, headers } = await analyst.create({ inputs: warm, message: 'First guess' });
@@ -58,7 +45,7 @@ describe('createStudy', () => {
     expect(read.body).toEqual(body);
     expect(read.headers.get('etag')).toBe('"w1"');
     expect((await analyst.revision(body.id as string, 1)).body).toMatchObject({ message: 'First guess', inputs: warm });
-    expect((await deeds())[0]).toMatchObject({
+    expect((await analyst.deeds())[0]).toMatchObject({
       action: 'study.created',
       subjectId: body.id,
       detail: { number: '2', title: warm.title },
@@ -147,8 +134,8 @@ describe('createStudy', () => {
 
 describe('writeWorkingCopy', () => {
   it('counts a change up and answers the new ETag; the newest revision stays, and no deed is told', async () => {
-    const id = await begin();
-    const before = (await deeds()).length;
+    const id = await analyst.begin();
+    const before = (await analyst.deeds()).length;
     server.clock.now += 60_000;
     const pending = { 'pack.series': 'x' };
     const { status, body, headers } = await engineer.write(id, 1, { inputs: titled('Other'), pending });
@@ -160,11 +147,11 @@ describe('writeWorkingCopy', () => {
     const read = (await analyst.read(id)).body;
     expect(read).toMatchObject({ title: 'Other', revision: 1, isChanged: true, changedAt, working: body });
     expect((await analyst.revision(id, 1)).body).toMatchObject({ title: warm.title });
-    expect(await deeds()).toHaveLength(before);
+    expect(await analyst.deeds()).toHaveLength(before);
   });
 
   it('refuses to write over another version, and leaves that one whole', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     await analyst.write(id, 1, { inputs: titled('Mine') });
     for (const version of [1, 3]) {
       const { body } = await engineer.write(id, version, { inputs: titled('Theirs') });
@@ -174,7 +161,7 @@ describe('writeWorkingCopy', () => {
   });
 
   it('takes the same content once more without counting up, also from the version before', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     const content = { inputs: titled('Mine'), pending: { 'cell.name': 7, 'pack.name': 8 } };
     const first = await analyst.write(id, 1, content);
     server.clock.now += 60_000;
@@ -188,14 +175,14 @@ describe('writeWorkingCopy', () => {
   });
 
   it('turns changed back to unchanged where the content is that of the revision again', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     expect((await analyst.write(id, 1, { inputs: titled('Mine') })).body.isChanged).toBe(true);
     expect((await analyst.write(id, 2, { inputs: warm })).body).toMatchObject({ version: 3, isChanged: false });
     expect((await analyst.write(id, 3, { inputs: warm, pending: { a: 1 } })).body.isChanged).toBe(true);
   });
 
   it('keeps the kind of the study, and takes nothing that the engine does not', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     const trip = await analyst.write(id, 1, { inputs: exampleTrip() });
     expect(trip.body).toMatchObject({ status: 422, errors: [{ path: 'body.inputs.kind' }] });
     expect(trip.body.detail).toContain('must be "session", but is "trip"');
@@ -205,7 +192,7 @@ describe('writeWorkingCopy', () => {
   });
 
   it('lets exactly one of several writers of one version win, whoever comes first', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     const writers = Array.from({ length: 6 }, (_none, i) => ({
       calls: [analyst, engineer][i % 2]!,
       name: `Writer ${i}`,
@@ -227,7 +214,7 @@ describe('writeWorkingCopy', () => {
 
 describe('a study of another workspace', () => {
   it('is not there, whatever is asked', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     const browser = await server.browserOf(world.people.outsider);
     const outsider = new StudyCalls(browser, world.outsiderWorkspaceId);
     for (const answer of [

@@ -1,6 +1,5 @@
 import { sql } from 'kysely';
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
-import { workspaceEndpoints } from '../contract/workspace.ts';
 import { engineVersion } from '../runs/headline-runs.ts';
 import { exampleStudy } from '../testing/example-study.ts';
 import { StudyCalls } from '../testing/study-calls.ts';
@@ -25,22 +24,9 @@ const warm = exampleStudy('vicuna-warm-arrival');
 const titled = (title: string) => ({ ...warm, title });
 const hotter = { ...titled('Hotter'), session: { ...warm.session, startTempC: 40 } };
 
-/** A new study of the analyst. The studies of a fresh world go on at number 2: number 1 is the world's own. */
-async function begin(inputs: object = warm): Promise<string> {
-  const { status, body } = await analyst.create({ inputs });
-  expect(status).toBe(201);
-  return body.id as string;
-}
-
-async function deeds(): Promise<unknown[]> {
-  const call = { params: { workspaceId: world.workspaceId } };
-  const { body } = await analyst.browser.call(workspaceEndpoints.listActivity, call);
-  return body.items as unknown[];
-}
-
 describe('saveRevision', () => {
   it('makes the working copy a revision with its message, author and headline', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     await engineer.write(id, 1, { inputs: hotter });
     const { status, body, headers } = await engineer.save(id, 2, ' Arrives hotter ');
     expect(status).toBe(201);
@@ -63,11 +49,11 @@ describe('saveRevision', () => {
     expect(revision.by).toEqual({ id: world.people.engineer, name: 'engineer' });
     expect(revision.headline).toEqual(body.headline);
     const detail = { number: '2', title: 'Hotter', revision: '2', message: 'Arrives hotter' };
-    expect((await deeds())[0]).toMatchObject({ action: 'study.revised', subjectId: id, detail });
+    expect((await analyst.deeds())[0]).toMatchObject({ action: 'study.revised', subjectId: id, detail });
   });
 
   it('refuses another version, entries that wait, no change, and no message', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     expect((await analyst.save(id, 1)).body).toMatchObject({ status: 409, code: 'UNCHANGED' });
     await analyst.write(id, 1, { inputs: hotter, pending: { 'pack.series': '-' } });
     expect((await analyst.save(id, 1)).body).toMatchObject({ status: 412, code: 'EDIT_CONFLICT' });
@@ -79,7 +65,7 @@ describe('saveRevision', () => {
   });
 
   it('saves once where two save at once, and answers the same to a call repeated under its key', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     await analyst.write(id, 1, { inputs: hotter });
     const answers = await Promise.all([analyst.save(id, 2), engineer.save(id, 2)]);
     expect(answers.map(({ body }) => (body.code as string) ?? body.revision).sort()).toEqual([2, 'UNCHANGED']);
@@ -91,7 +77,7 @@ describe('saveRevision', () => {
   });
 
   it('takes the numbers of the version that it saves, where somebody writes while the engine runs', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     await analyst.write(id, 1, { inputs: hotter });
     const [saved, written] = await Promise.all([
       analyst.save(id, 2),
@@ -107,7 +93,7 @@ describe('saveRevision', () => {
 
 describe('revisions of a study', () => {
   it('are listed newest first, in pages, with their numbers', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     for (const [i, inputs] of [hotter, titled('Third'), titled('Fourth')].entries()) {
       await analyst.write(id, i + 1, { inputs });
       await analyst.save(id, i + 2, `Step ${i + 2}`);
@@ -127,7 +113,7 @@ describe('revisions of a study', () => {
   });
 
   it('cannot be changed or deleted, even by a statement that goes past the server', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     const { db } = server.core;
     for (const change of ["message = 'Other'", "inputs = '{}'", "headline = '{}'", 'revision = 7', 'authorId = NULL']) {
       const update = sql.raw(`UPDATE studyRevisions SET ${change} WHERE studyId = '${id}'`).execute(db);
@@ -147,7 +133,7 @@ describe('revisions of a study', () => {
   });
 
   it('go with their workspace', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     const { db } = server.core;
     await db.deleteFrom('workspaces').where('id', '=', world.workspaceId).execute();
     for (const table of ['studyRevisions', 'studyParts'] as const) {
@@ -156,7 +142,7 @@ describe('revisions of a study', () => {
   });
 
   it('stay without their author where the account is gone', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     await server.core.db.deleteFrom('people').where('id', '=', world.people.analyst).execute();
     expect((await engineer.read(id)).body).toMatchObject({ owner: null, changedBy: null, title: warm.title });
     expect((await engineer.revision(id, 1)).body).toMatchObject({ by: null, message: 'Created' });
@@ -165,7 +151,7 @@ describe('revisions of a study', () => {
 
 describe('copyStudy', () => {
   it('makes a study of the caller’s own from the newest revision, not from the working copy', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     await analyst.write(id, 1, { inputs: hotter });
     const { status, body } = await engineer.copy(id);
     expect(status).toBe(201);
@@ -179,14 +165,14 @@ describe('copyStudy', () => {
     expect(body.headline.numbers).toEqual((await analyst.read(id)).body.headline.numbers);
     const message = 'Copy of study 2, revision 1';
     expect((await analyst.revision(body.id as string, 1)).body).toMatchObject({ message });
-    expect((await deeds())[0]).toMatchObject({
+    expect((await analyst.deeds())[0]).toMatchObject({
       action: 'study.copied',
       detail: { number: '3', title: body.title, message },
     });
   });
 
   it('copies an older revision under the title it is given; a long title stays within the engine’s bound', async () => {
-    const id = await begin(titled('🏔'.repeat(150)));
+    const id = await analyst.begin(titled('🏔'.repeat(150)));
     await analyst.write(id, 1, { inputs: hotter });
     await analyst.save(id, 2);
     const old = await analyst.copy(id, { revision: 1, title: ' Cooler ' });
@@ -199,7 +185,7 @@ describe('copyStudy', () => {
   });
 
   it('finds no revision that is not there', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     expect((await analyst.copy(id, { revision: 2 })).status).toBe(404);
     expect((await analyst.copy(world.workspaceId)).status).toBe(404);
     expect((await analyst.copy(id, { title: 'x'.repeat(301) })).status).toBe(422);
@@ -208,7 +194,7 @@ describe('copyStudy', () => {
 
 describe('the archive', () => {
   it('keeps a study from every change until it is taken out; going in and out twice changes nothing more', async () => {
-    const id = await begin();
+    const id = await analyst.begin();
     await analyst.write(id, 1, { inputs: hotter });
     const archived = await analyst.archive(id);
     expect(archived.body.archivedAt).toBe(new Date(server.clock.now).toISOString());
@@ -225,7 +211,7 @@ describe('the archive', () => {
     expect((await analyst.unarchive(id)).body).toMatchObject({ archivedAt: null, working: { version: 2 } });
     expect((await analyst.unarchive(id)).status).toBe(200);
     expect((await analyst.save(id, 2)).status).toBe(201);
-    const actions = (await deeds()).map((deed) => (deed as { action: string }).action).slice(0, 4);
+    const actions = (await analyst.deeds()).map((deed) => (deed as { action: string }).action).slice(0, 4);
     expect(actions).toEqual(['study.revised', 'study.unarchived', 'study.copied', 'study.archived']);
   });
 });

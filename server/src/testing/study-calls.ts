@@ -1,5 +1,5 @@
-import type { PartReference } from '../contract/study.ts';
-import { studyEndpoints as studies } from '../contract/study.ts';
+import { type PartReference, studyEndpoints as studies } from '../contract/study.ts';
+import { workspaceEndpoints } from '../contract/workspace.ts';
 import { etagOf } from '../http/if-match.ts';
 import { exampleStudy } from './example-study.ts';
 import type { TestAnswer, TestBrowser } from './test-browser.ts';
@@ -24,6 +24,19 @@ export class StudyCalls {
 
   create(content: Content = { inputs: exampleStudy() }, headers?: Record<string, string>): Promise<TestAnswer> {
     return this.browser.call(studies.createStudy, { params: this.inWorkspace(), body: content as never, headers });
+  }
+
+  /** Makes a study and gives its id. @throws if the server refuses it */
+  async begin(inputs: object = exampleStudy()): Promise<string> {
+    const made = await this.create({ inputs });
+    if (made.status !== 201) throw new Error(`createStudy answered ${made.status}: ${JSON.stringify(made.body)}`);
+    return (made.body as { id: string }).id;
+  }
+
+  /** The activity log of the workspace, newest first. */
+  async deeds(): Promise<unknown[]> {
+    const listed = await this.browser.call(workspaceEndpoints.listActivity, { params: this.inWorkspace() });
+    return (listed.body as { items: unknown[] }).items;
   }
 
   read(studyId: string): Promise<TestAnswer> {
